@@ -1,0 +1,9 @@
+import { z } from 'zod';
+import { idField } from './fields';
+
+/** `GET /api/events`: what changed for this person, by ids only; the event's name is its `kind`. */
+export const changeEvent = z.discriminatedUnion('kind', [
+  z.object({ kind: z.literal('member'), teamId: idField, personId: idField }),
+  z.object({ kind: z.literal('sheet'), teamId: idField, sheetId: idField }),
+]);
+export type ChangeEvent = z.infer<typeof changeEvent>;
