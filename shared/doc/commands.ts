@@ -1,0 +1,151 @@
+import { equalityDeep } from 'lib0/function';
+import type * as Y from 'yjs';
+import { catalogueEntry } from '../circuit/catalogue';
+import {
+  type DrawnKind,
+  type DrawnPart,
+  isComponent,
+  type PartId,
+  partIdSchema,
+  type Wire,
+  type WireEnd,
+  type WireId,
+  wireIdSchema,
+} from '../circuit/drawing';
+import type { GridPoint, Place } from '../geometry/place';
+import { nextReference } from './next-reference';
+import { readDrawing } from './read-drawing';
+import { edit, sheetMaps } from './sheet-maps';
+
+/** Gives ids that nobody else gives; letters, digits, `_` and `-`. */
+export type IdSource = () => string;
+
+/** Places a part with the values that its kind is born with, under the next free reference. */
+export function addPart(
+  doc: Y.Doc,
+  kind: DrawnKind,
+  place: Place,
+  newId: IdSource,
+  values?: DrawnPart['values'],
+): PartId {
+  return edit(doc, () => {
+    const id = partIdSchema.parse(newId());
+    const { refLetter, initialValues } = catalogueEntry(kind);
+    const ref = refLetter === undefined ? {} : { ref: nextReference(referencesIn(doc), refLetter) };
+    sheetMaps(doc).parts.set(id, { kind, ...ref, place, values: values ?? initialValues });
+    return id;
+  });
+}
+
+/** Joins two terminals by a wire. Nothing happens where they are one terminal or already joined directly. */
+export function connect(doc: Y.Doc, from: WireEnd, to: WireEnd, newId: IdSource): WireId | undefined {
+  if (sameEnd(from, to)) return undefined;
+  const joined = readDrawing(doc).drawing.wires.some(
+    (wire) => (sameEnd(wire.from, from) && sameEnd(wire.to, to)) || (sameEnd(wire.from, to) && sameEnd(wire.to, from)),
+  );
+  if (joined) return undefined;
+  return edit(doc, () => {
+    const id = wireIdSchema.parse(newId());
+    sheetMaps(doc).wires.set(id, { from, to });
+    return id;
+  });
+}
+
+/** Ties a terminal to the middle of a wire: a junction there, the wire in two halves. */
+export function connectToWire(doc: Y.Doc, from: WireEnd, wire: Wire, at: GridPoint, newId: IdSource): PartId {
+  return edit(doc, () => {
+    const { wires, routes } = sheetMaps(doc);
+    const junction = addPart(doc, 'junction', { ...at, turn: 0, flip: false }, newId);
+    const end: WireEnd = { part: junction, pin: 'net' };
+    wires.delete(wire.id);
+    routes.delete(wire.id);
+    for (const other of [wire.from, wire.to, from]) {
+      if (!sameEnd(other, end)) wires.set(wireIdSchema.parse(newId()), { from: other, to: end });
+    }
+    return junction;
+  });
+}
+
+/**
+ * Moves, turns or mirrors parts. Corners chosen on a wire move along when both its ends moved alike and are given up
+ * when they did not, for they would no longer lead anywhere sensible.
+ */
+export function placeParts(doc: Y.Doc, places: ReadonlyMap<PartId, Place>): void {
+  const { drawing } = readDrawing(doc);
+  const before = new Map(drawing.parts.map((part) => [part.id, part.place]));
+  const moved = new Map([...places].filter(([id, place]) => before.has(id) && !equalityDeep(before.get(id), place)));
+  if (moved.size === 0) return;
+  edit(doc, () => {
+    const maps = sheetMaps(doc);
+    for (const [id, place] of moved) maps.places.set(id, place);
+    for (const wire of drawing.wires) {
+      if (wire.bends.length === 0) continue;
+      const from = shift(before.get(wire.from.part), moved.get(wire.from.part));
+      const to = shift(before.get(wire.to.part), moved.get(wire.to.part));
+      if (from === undefined && to === undefined) continue;
+      if (from && to && equalityDeep(from, to)) {
+        maps.routes.set(
+          wire.id,
+          wire.bends.map((bend) => ({ x: bend.x + from.x, y: bend.y + from.y })),
+        );
+      } else maps.routes.delete(wire.id);
+    }
+  });
+}
+
+/** Sets one value of a part (SI base units), or takes it away with null. */
+export function setValue(doc: Y.Doc, part: DrawnPart, name: string, value: unknown): void {
+  const { parts, params } = sheetMaps(doc);
+  const present = Object.entries(part.values).find(([key]) => key === name)?.[1] ?? null;
+  if (!parts.has(part.id) || equalityDeep(present, value)) return;
+  edit(doc, () => params.set(`${part.id}/${name}`, value));
+}
+
+/** Gives a part another reference; refused where another part has it. */
+export function setReference(doc: Y.Doc, part: DrawnPart, ref: string): { ok: true } | { ok: false; reason: string } {
+  if (!isComponent(part) || part.ref === ref) return { ok: true };
+  if (referencesIn(doc).has(ref))
+    return { ok: false, reason: `${ref} is taken: choose another, or rename that part first.` };
+  edit(doc, () => sheetMaps(doc).params.set(`${part.id}/ref`, ref));
+  return { ok: true };
+}
+
+/** Removes parts with the wires that end on them, and wires. Only the records go, so that an undo finds all values. */
+export function remove(doc: Y.Doc, partIds: ReadonlySet<PartId>, wireIds: ReadonlySet<WireId>): void {
+  const { drawing } = readDrawing(doc);
+  const wires = drawing.wires.filter(
+    (wire) => wireIds.has(wire.id) || partIds.has(wire.from.part) || partIds.has(wire.to.part),
+  );
+  const parts = drawing.parts.filter((part) => partIds.has(part.id));
+  if (wires.length + parts.length === 0) return;
+  edit(doc, () => {
+    const maps = sheetMaps(doc);
+    for (const wire of wires) maps.wires.delete(wire.id);
+    for (const part of parts) maps.parts.delete(part.id);
+  });
+}
+
+/** Sets the sheet's temperature in °C. */
+export function setTemperature(doc: Y.Doc, celsius: number): void {
+  const { sheet } = sheetMaps(doc);
+  if (sheet.get('temperature') !== celsius) edit(doc, () => sheet.set('temperature', celsius));
+}
+
+function referencesIn(doc: Y.Doc): Set<string> {
+  return new Set(
+    readDrawing(doc)
+      .drawing.parts.filter(isComponent)
+      .map((part) => part.ref),
+  );
+}
+
+function sameEnd(a: WireEnd, b: WireEnd): boolean {
+  return a.part === b.part && a.pin === b.pin;
+}
+
+/** How far a part was moved; not a number where it was turned or mirrored too, so that it equals nothing. */
+function shift(before: Place | undefined, after: Place | undefined): GridPoint | undefined {
+  if (!before || !after) return undefined;
+  const turnedToo = before.turn !== after.turn || before.flip !== after.flip;
+  return turnedToo ? { x: Number.NaN, y: Number.NaN } : { x: after.x - before.x, y: after.y - before.y };
+}

@@ -1,0 +1,77 @@
+import { equalityDeep } from 'lib0/function';
+import { useCallback, useEffect, useMemo, useRef, useSyncExternalStore } from 'react';
+import { z } from 'zod';
+import { gridPointSchema, type PartId, partIdSchema } from '#shared/circuit/drawing';
+import type { GridPoint } from '#shared/geometry/place';
+import type { Room } from './room';
+import type { Selection } from './selection';
+
+/** Somebody else on this sheet, as the server vouches for them. */
+export type OtherPerson = {
+  /** Of the connection: one person in two windows is there twice. */
+  readonly id: number;
+  readonly name: string;
+  readonly initials: string;
+  readonly selection: ReadonlySet<PartId>;
+  readonly pointer: GridPoint | undefined;
+};
+
+/** Most often that a moving pointer is told to the others, in ms. */
+const POINTER_INTERVAL = 50;
+
+const presenceSchema = z.object({
+  user: z.object({ name: z.string(), initials: z.string() }),
+  selection: z.array(partIdSchema).max(1000).catch([]),
+  pointer: gridPointSchema
+    .or(z.object({ x: z.number(), y: z.number() }))
+    .optional()
+    .catch(undefined),
+});
+
+/** Everyone else who is here; what they say of themselves is read with suspicion, who they are comes from the server. */
+export function useOthers(room: Room): readonly OtherPerson[] {
+  const { awareness } = room;
+  const last = useRef<readonly OtherPerson[]>([]);
+  const subscribe = useCallback(
+    (listener: () => void) => {
+      awareness.on('change', listener);
+      return () => awareness.off('change', listener);
+    },
+    [awareness],
+  );
+  return useSyncExternalStore(subscribe, () => {
+    const others: OtherPerson[] = [];
+    for (const [client, state] of awareness.getStates()) {
+      if (client === awareness.clientID) continue;
+      const presence = presenceSchema.safeParse(state);
+      if (!presence.success) continue;
+      const { user, selection, pointer } = presence.data;
+      others.push({ id: client, ...user, selection: new Set(selection), pointer });
+    }
+    others.sort((a, b) => a.id - b.id);
+    if (!equalityDeep(last.current, others)) last.current = others;
+    return last.current;
+  });
+}
+
+/** Tells the others what is selected here; returns how to tell where the pointer is. */
+export function usePresence(room: Room, selection: Selection): (at: GridPoint | undefined) => void {
+  const { awareness } = room;
+  useEffect(() => awareness.setLocalStateField('selection', [...selection.parts]), [awareness, selection]);
+  const throttled = useMemo(() => {
+    let waiting: ReturnType<typeof setTimeout> | undefined;
+    let latest: GridPoint | undefined;
+    return {
+      tell(at: GridPoint | undefined) {
+        latest = at && { x: Math.round(at.x), y: Math.round(at.y) };
+        waiting ??= setTimeout(() => {
+          waiting = undefined;
+          awareness.setLocalStateField('pointer', latest);
+        }, POINTER_INTERVAL);
+      },
+      stop: () => clearTimeout(waiting),
+    };
+  }, [awareness]);
+  useEffect(() => throttled.stop, [throttled]);
+  return throttled.tell;
+}

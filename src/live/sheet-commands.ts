@@ -1,0 +1,77 @@
+import { useCallback, useMemo, useSyncExternalStore } from 'react';
+import type { DrawnKind, DrawnPart, PartId, Wire, WireEnd, WireId } from '#shared/circuit/drawing';
+import {
+  addPart,
+  connect,
+  connectToWire,
+  placeParts,
+  remove,
+  setReference,
+  setTemperature,
+  setValue,
+} from '#shared/doc/commands';
+import type { GridPoint, Place } from '#shared/geometry/place';
+import type { Room } from './room';
+
+/** Everything a person can do to a drawing; each call is one undo step, and none does anything where they may only look. */
+export type SheetCommands = {
+  readonly canEdit: boolean;
+  addPart(kind: DrawnKind, place: Place, values?: DrawnPart['values']): PartId | undefined;
+  connect(from: WireEnd, to: WireEnd): void;
+  connectToWire(from: WireEnd, wire: Wire, at: GridPoint): void;
+  placeParts(places: ReadonlyMap<PartId, Place>): void;
+  remove(parts: ReadonlySet<PartId>, wires: ReadonlySet<WireId>): void;
+  /** SI base units; null takes the value away. */
+  setValue(part: DrawnPart, name: string, value: unknown): void;
+  setReference(part: DrawnPart, ref: string): { ok: true } | { ok: false; reason: string };
+  setTemperature(celsius: number): void;
+  undo(): void;
+  redo(): void;
+  readonly canUndo: boolean;
+  readonly canRedo: boolean;
+};
+
+const ONLY_LOOKING = {
+  ok: false,
+  reason: 'You may only look at this sheet: ask an owner for the designer role.',
+} as const;
+
+export function useSheetCommands(room: Room, canEdit: boolean): SheetCommands {
+  const { doc, undo } = room;
+  const subscribe = useCallback(
+    (listener: () => void) => {
+      const events = ['stack-item-added', 'stack-item-popped', 'stack-cleared'] as const;
+      for (const event of events) undo.on(event, listener);
+      return () => {
+        for (const event of events) undo.off(event, listener);
+      };
+    },
+    [undo],
+  );
+  const canUndo = useSyncExternalStore(subscribe, () => undo.canUndo()) && canEdit;
+  const canRedo = useSyncExternalStore(subscribe, () => undo.canRedo()) && canEdit;
+  return useMemo((): SheetCommands => {
+    /** Runs a change as an undo step of its own. */
+    const step = <T>(change: () => T): T | undefined => {
+      if (!canEdit) return undefined;
+      undo.stopCapturing();
+      return change();
+    };
+    const newId = () => crypto.randomUUID();
+    return {
+      canEdit,
+      canUndo,
+      canRedo,
+      addPart: (kind, place, values) => step(() => addPart(doc, kind, place, newId, values)),
+      connect: (from, to) => void step(() => connect(doc, from, to, newId)),
+      connectToWire: (from, wire, at) => void step(() => connectToWire(doc, from, wire, at, newId)),
+      placeParts: (places) => void step(() => placeParts(doc, places)),
+      remove: (parts, wires) => void step(() => remove(doc, parts, wires)),
+      setValue: (part, name, value) => void step(() => setValue(doc, part, name, value)),
+      setReference: (part, ref) => step(() => setReference(doc, part, ref)) ?? ONLY_LOOKING,
+      setTemperature: (celsius) => void step(() => setTemperature(doc, celsius)),
+      undo: () => void step(() => undo.undo()),
+      redo: () => void step(() => undo.redo()),
+    };
+  }, [doc, undo, canEdit, canUndo, canRedo]);
+}
