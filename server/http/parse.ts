@@ -1,0 +1,20 @@
+import { Refusal } from '#shared/api/refusal';
+import type { z } from 'zod';
+
+/** The body as its schema says, or a refusal that names each field that is wrong. */
+export function parseBody<T>(schema: z.ZodType<T>, body: unknown): T {
+  if (body === undefined) throw new Refusal('malformed-request', 'Send a JSON body.');
+  const read = schema.safeParse(body);
+  if (read.success) return read.data;
+  const fields: Record<string, string> = {};
+  for (const issue of read.error.issues) {
+    for (const place of places(issue)) fields[place] ??= issue.message;
+  }
+  throw new Refusal('invalid', 'Some of what was sent cannot be taken.', { fields });
+}
+
+function places(issue: z.core.$ZodIssue): string[] {
+  const path = issue.path.map(String);
+  const keys = issue.code === 'unrecognized_keys' ? issue.keys : [];
+  return keys.length > 0 ? keys.map((key) => [...path, key].join('.')) : [path.join('.') || 'body'];
+}
