@@ -3,7 +3,7 @@ import { SYMBOL_PINS } from '../geometry/pins';
 import {
   intentSchema,
   netNameSchema,
-  polarityFieldsSchema,
+  overridesSchema,
   processSetSchema,
   refSchema,
   spreadSchema,
