@@ -2,6 +2,7 @@ import { pinPlaces } from '../geometry/pins';
 import type { GridPoint } from '../geometry/place';
 import { bodyLedOut, type Drawing, type DrawnPart, isComponent, type WireEnd } from './drawing';
 import { byReference } from './reference-order';
+import { UnionFind } from './union-find';
 
 /** A terminal of a drawn part, where it lies on the sheet. */
 export type Terminal = WireEnd & { readonly at: GridPoint };
@@ -33,7 +34,7 @@ export function findNets(drawing: Drawing): DrawnNets {
   const terminals = drawing.parts.flatMap((part) =>
     pinPlaces(part.kind, part.place, bodyLedOut(part)).map(({ pin, at }): Terminal => ({ part: part.id, pin, at })),
   );
-  const joined = new Joined();
+  const joined = new UnionFind();
   for (const terminal of terminals) joined.join(terminalKey(terminal), `at ${terminal.at.x} ${terminal.at.y}`);
   for (const wire of drawing.wires) joined.join(terminalKey(wire.from), terminalKey(wire.to));
   for (const part of drawing.parts) {
@@ -43,7 +44,7 @@ export function findNets(drawing: Drawing): DrawnNets {
 
   const groups = new Map<string, Terminal[]>();
   for (const terminal of terminals) {
-    const root = joined.rootOf(terminalKey(terminal));
+    const root = joined.find(terminalKey(terminal));
     const group = groups.get(root);
     if (group) group.push(terminal);
     else groups.set(root, [terminal]);
@@ -103,24 +104,4 @@ function lowestTerminal(group: readonly Terminal[], parts: ReadonlyMap<string, D
     if (!lowest || byReference(part.ref, lowest.ref) < 0) lowest = { ref: part.ref, pin };
   }
   return lowest && `${lowest.ref}.${lowest.pin}`;
-}
-
-/** Disjoint sets with path halving (Tarjan and van Leeuwen, J. ACM 31(2), 1984; from memory). */
-class Joined {
-  readonly #parent = new Map<string, string>();
-
-  rootOf(key: string): string {
-    let at = key;
-    for (;;) {
-      const parent = this.#parent.get(at) ?? at;
-      if (parent === at) return at;
-      const grandparent = this.#parent.get(parent) ?? parent;
-      this.#parent.set(at, grandparent);
-      at = grandparent;
-    }
-  }
-
-  join(a: string, b: string): void {
-    this.#parent.set(this.rootOf(a), this.rootOf(b));
-  }
 }

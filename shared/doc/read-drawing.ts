@@ -1,4 +1,6 @@
 import type * as Y from 'yjs';
+import type { ZodError } from 'zod';
+import { type ProcessSet, processSetSchema } from '../circuit/circuit-file';
 import {
   type Drawing,
   type DrawnComponent,
@@ -50,7 +52,7 @@ function readParts(doc: Y.Doc, setAside: SetAside[]): DrawnPart[] {
   for (const id of [...parts.keys()].sort()) {
     const birth = drawnPartSchema.safeParse(withId(parts.get(id), id));
     if (!birth.success) {
-      setAside.push({ map: 'parts', key: id, reason: birth.error.issues[0]?.message ?? 'unreadable' });
+      setAside.push({ map: 'parts', key: id, reason: firstReason(birth.error) });
       continue;
     }
     const place = placeSchema.safeParse(places.get(id));
@@ -72,7 +74,7 @@ function overlay(part: DrawnPart, values: readonly [name: string, value: unknown
       setAside.push({
         map: 'params',
         key: `${part.id}/${name}`,
-        reason: next.error.issues[0]?.message ?? 'unreadable',
+        reason: firstReason(next.error),
       });
   }
   return kept;
@@ -93,7 +95,7 @@ function readWires(doc: Y.Doc, parts: readonly DrawnPart[], setAside: SetAside[]
   for (const id of [...wires.keys()].sort()) {
     const ends = wireSchema.safeParse({ ...objectOf(wires.get(id)), id, bends: [] });
     if (!ends.success) {
-      setAside.push({ map: 'wires', key: id, reason: ends.error.issues[0]?.message ?? 'unreadable' });
+      setAside.push({ map: 'wires', key: id, reason: firstReason(ends.error) });
       continue;
     }
     const { from, to } = ends.data;
@@ -108,25 +110,25 @@ function readWires(doc: Y.Doc, parts: readonly DrawnPart[], setAside: SetAside[]
 
 function readSettings(doc: Y.Doc, setAside: SetAside[]): SheetSettings {
   const { sheet } = sheetMaps(doc);
-  const { shape } = sheetSettingsSchema;
-  const processes: SheetSettings['processes'] = {};
-  let settings: SheetSettings = { ...DEFAULT_SETTINGS, processes };
+  const processes: [name: string, process: ProcessSet][] = [];
+  let settings = DEFAULT_SETTINGS;
   for (const key of [...sheet.keys()].sort()) {
-    const process = processNameOf(key);
-    const value = sheet.get(key);
-    const parsed =
-      process === undefined
-        ? sheetSettingsSchema.safeParse({ ...settings, [key]: value })
-        : shape.processes.safeParse(Object.fromEntries([[process, value]]));
-    if (!parsed.success) {
-      setAside.push({ map: 'sheet', key, reason: parsed.error.issues[0]?.message ?? 'unreadable' });
-    } else if (process === undefined) {
-      settings = { ...(parsed.data as SheetSettings), processes };
+    const name = processNameOf(key);
+    if (name === undefined) {
+      const next = sheetSettingsSchema.safeParse({ ...settings, [key]: sheet.get(key) });
+      if (next.success) settings = next.data;
+      else setAside.push({ map: 'sheet', key, reason: firstReason(next.error) });
     } else {
-      Object.assign(processes, parsed.data);
+      const process = processSetSchema.safeParse(sheet.get(key));
+      if (process.success) processes.push([name, process.data]);
+      else setAside.push({ map: 'sheet', key, reason: firstReason(process.error) });
     }
   }
-  return settings;
+  return { ...settings, processes: Object.fromEntries(processes) };
+}
+
+function firstReason(error: ZodError): string {
+  return error.issues[0]?.message ?? 'It cannot be read.';
 }
 
 /** The lowest id keeps a reference given twice; the others take the next free number of the same letters. */
