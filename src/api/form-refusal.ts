@@ -11,13 +11,16 @@ export function refuseForm<Values extends FieldValues>(
   setError: UseFormSetError<Values>,
 ): string | null {
   if (!(error instanceof ApiError)) throw error;
+  const left: string[] = [];
   let placed = false;
-  for (const field of fields) {
-    const message = error.fields[field];
-    if (message === undefined) continue;
+  for (const [name, message] of Object.entries(error.fields)) {
+    const field = fields.find((one) => one === name);
+    if (field === undefined) {
+      left.push(message);
+      continue;
+    }
     setError(field, { type: 'server', message }, { shouldFocus: !placed });
     placed = true;
   }
-  const elsewhere = Object.keys(error.fields).some((name) => !fields.some((field) => field === name));
-  return placed && !elsewhere ? null : error.message;
+  return placed && left.length === 0 ? null : [error.message, ...left].join(' ');
 }

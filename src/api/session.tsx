@@ -34,11 +34,12 @@ export function useSignUp() {
   });
 }
 
-export function useSignOut() {
+/** Signs out and goes to `then`, a path of ours. */
+export function useSignOut(then = '/sign-in') {
   return useMutation({
     mutationFn: () => callForNothing('POST', '/api/sign-out', {}),
     // A fresh page load leaves nothing of this person in memory: no query, no open sheet, no undo stack.
-    onSuccess: () => window.location.assign('/sign-in'),
+    onSuccess: () => window.location.assign(then),
   });
 }
 

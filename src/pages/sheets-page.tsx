@@ -1,0 +1,38 @@
+import { useState } from 'react';
+import { can } from '#shared/access/roles';
+import type { OwnTeam } from '#shared/api/accounts';
+import { BeginSheet } from '../features/sheets/begin-sheet';
+import type { Beginning } from '../features/sheets/beginning';
+import { NewSheetDialog } from '../features/sheets/new-sheet-dialog';
+import { TeamSheets } from '../features/sheets/team-sheets';
+import { OwnRole } from '../features/teams/role-notes';
+import { Button } from '../ui/button';
+import { PageTitle } from '../ui/page-title';
+import { TeamFrame } from './team-frame';
+
+/** The team's sheets, and the ways to begin one. */
+export function SheetsPage() {
+  const [begin, setBegin] = useState<Beginning | null>(null);
+  const beginBlank = () => setBegin({ kind: 'blank' });
+  const mayBegin = (team: OwnTeam) => can(team.role, 'edit-sheet');
+  return (
+    <TeamFrame margin={(team) => (mayBegin(team) ? <BeginSheet onChoose={setBegin} /> : <OwnRole role={team.role} />)}>
+      {(team) => (
+        <>
+          <div className="mb-4 flex items-center justify-between gap-4">
+            <PageTitle windowTitle={`Sheets of ${team.name}`}>Sheets</PageTitle>
+            {mayBegin(team) && (
+              <Button look="strong" className="lg:hidden" onClick={beginBlank}>
+                New sheet
+              </Button>
+            )}
+          </div>
+          <TeamSheets key={team.id} team={team} onBegin={beginBlank} />
+          {begin !== null && (
+            <NewSheetDialog teamId={team.id} begin={begin} onBegin={setBegin} onClose={() => setBegin(null)} />
+          )}
+        </>
+      )}
+    </TeamFrame>
+  );
+}
