@@ -5,7 +5,10 @@ import { findChromium } from './find-chromium';
 /** Sees to it that there is a browser to test with, and says which: Debian's package as root, Playwright's own elsewhere. */
 export function ensureChromium(): void {
   const found = findChromium();
-  if (found) return say(`Browser tests use ${found}.`);
+  if (found) {
+    say(`Browser tests use ${found}.`);
+    return;
+  }
   if (process.getuid?.() === 0 && existsSync('/usr/bin/apt-get')) {
     say('No Chromium here: installing the Debian package (apt-get install chromium).');
     run('apt-get', ['update', '-q']);
