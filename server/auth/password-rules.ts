@@ -22,7 +22,10 @@ function length(text: string): number {
 }
 
 function ownWords({ name, email }: { name: string; email: string }): string[] {
-  const words = `${name} ${email}`.normalize('NFKC').toLowerCase().split(/[^\p{L}\p{N}]+/u);
+  const words = `${name} ${email}`
+    .normalize('NFKC')
+    .toLowerCase()
+    .split(/[^\p{L}\p{N}]+/u);
   // Longest first: "ann" must not break up "annika".
   return words.filter((word) => length(word) >= 3).sort((a, b) => b.length - a.length);
 }

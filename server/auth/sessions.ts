@@ -1,5 +1,5 @@
-import type { Person } from '#shared/api/accounts';
 import { type Adapter, Lucia, TimeSpan } from 'lucia';
+import type { Person } from '#shared/api/accounts';
 import { SESSION_LIMITS, sessionLives } from './session-limits';
 import { hashToken } from './tokens';
 

@@ -1,7 +1,7 @@
-import { type Role, ROLES } from '#shared/access/roles';
-import { SHEET_STATES } from '#shared/api/sheets';
 import { sql } from 'drizzle-orm';
 import { blob, check, index, integer, primaryKey, sqliteTable, text } from 'drizzle-orm/sqlite-core';
+import { ROLES, type Role } from '#shared/access/roles';
+import { SHEET_STATES } from '#shared/api/sheets';
 
 // Times are integers, in milliseconds since 1970, but for sessions.expires_at, which lucia keeps in seconds.
 
@@ -98,10 +98,7 @@ export const sheets = sqliteTable(
     createdAt: integer('created_at').notNull(),
     changedAt: integer('changed_at').notNull(),
   },
-  (table) => [
-    index('sheets_by_team').on(table.teamId),
-    check('sheets_state', sql`${table.state} in (${STATE_LIST})`),
-  ],
+  (table) => [index('sheets_by_team').on(table.teamId), check('sheets_state', sql`${table.state} in (${STATE_LIST})`)],
 );
 
 /** The live document: Yjs updates in the order they were stored; compaction puts one row in the place of many. */

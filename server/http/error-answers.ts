@@ -1,6 +1,6 @@
+import type { ErrorRequestHandler, RequestHandler } from 'express';
 import { type ErrorAnswer, type ErrorCode, STATUS_OF_CODE } from '#shared/api/errors';
 import { Refusal } from '#shared/api/refusal';
-import type { ErrorRequestHandler, RequestHandler } from 'express';
 
 export const noSuchRoute: RequestHandler = () => {
   throw new Refusal('not-found', 'There is nothing at this address.');
@@ -12,7 +12,8 @@ export const answerErrors: ErrorRequestHandler = (error: unknown, request, respo
   const refusal = error instanceof Refusal ? error : asRefusal(error);
   if (!refusal) request.log.error({ err: error }, 'a request failed');
   const { code, message, fields, retryAfter } =
-    refusal ?? new Refusal('internal', `Something went wrong here, not with what you sent. It is logged as ${request.id}.`);
+    refusal ??
+    new Refusal('internal', `Something went wrong here, not with what you sent. It is logged as ${request.id}.`);
   if (retryAfter !== undefined) response.set('Retry-After', String(Math.max(1, Math.ceil(retryAfter))));
   const answer: ErrorAnswer = { error: { code, message, ...(fields && { fields }) } };
   response.status(STATUS_OF_CODE[code]).json(answer);

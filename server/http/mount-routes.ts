@@ -1,5 +1,5 @@
-import { Refusal } from '#shared/api/refusal';
 import express, { type Express, type Request, type RequestHandler, type Response } from 'express';
+import { Refusal } from '#shared/api/refusal';
 import type { Sessions, SignedIn } from '../auth/sessions';
 import { answerErrors, noSuchRoute } from './error-answers';
 import { sendEvents } from './event-stream';
@@ -32,9 +32,12 @@ export function mountRoutes(app: Express, routes: readonly Route[], sessions: Se
     app[route.method](route.path, ...limits(route), async (request, response) => {
       const call = callOf(request, response);
       const { signedIn } = call;
-      if (route.access === 'public') return send(response, await route.handle(call));
-      if (!signedIn) throw new Refusal('not-signed-in', 'Sign in first.');
-      send(response, await route.handle({ ...call, signedIn }));
+      if (route.access === 'public') {
+        send(response, await route.handle(call));
+      } else {
+        if (!signedIn) throw new Refusal('not-signed-in', 'Sign in first.');
+        send(response, await route.handle({ ...call, signedIn }));
+      }
     });
   }
   app.use('/api', noSuchRoute, answerErrors);
@@ -42,7 +45,9 @@ export function mountRoutes(app: Express, routes: readonly Route[], sessions: Se
 
 function limits({ perMinute: limit, access }: Route): RequestHandler[] {
   if (limit === undefined) return [];
-  return [perMinute(limit, access === 'public' ? byAddress : (_request, response) => signedInOf(response)?.person.id ?? '')];
+  return [
+    perMinute(limit, access === 'public' ? byAddress : (_request, response) => signedInOf(response)?.person.id ?? ''),
+  ];
 }
 
 function signedInOf(response: Response): SignedIn | null {
@@ -59,7 +64,10 @@ function callOf(request: Request, response: Response): Call {
 }
 
 function send(response: Response, answer: Awaited<ReturnType<Route['handle']>>): void {
-  if ('events' in answer) return sendEvents(response, answer.events);
+  if ('events' in answer) {
+    sendEvents(response, answer.events);
+    return;
+  }
   if (answer.setCookie !== undefined) response.append('Set-Cookie', answer.setCookie);
   response.status(answer.status);
   if (answer.body === undefined) response.end();

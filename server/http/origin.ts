@@ -1,5 +1,5 @@
-import { Refusal } from '#shared/api/refusal';
 import type { RequestHandler } from 'express';
+import { Refusal } from '#shared/api/refusal';
 
 /** The origins whose pages are our own. */
 export type OwnOrigins = () => ReadonlySet<string>;

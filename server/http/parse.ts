@@ -1,5 +1,5 @@
-import { Refusal } from '#shared/api/refusal';
 import type { z } from 'zod';
+import { Refusal } from '#shared/api/refusal';
 
 /** The body as its schema says, or a refusal that names each field that is wrong. */
 export function parseBody<T>(schema: z.ZodType<T>, body: unknown): T {

@@ -1,6 +1,6 @@
-import { Refusal } from '#shared/api/refusal';
 import type { Request, RequestHandler, Response } from 'express';
 import { ipKeyGenerator, rateLimit } from 'express-rate-limit';
+import { Refusal } from '#shared/api/refusal';
 
 /** At most so many calls a minute under one key; more are refused with the seconds to wait. */
 export function perMinute(limit: number, key: (request: Request, response: Response) => string): RequestHandler {

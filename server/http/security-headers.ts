@@ -2,7 +2,10 @@ import type { RequestHandler } from 'express';
 import helmet from 'helmet';
 
 /** The browser is told to run, load and reach nothing but this server's own, and to show it in no other site's frame. */
-export function securityHeaders(site: { readonly tls: boolean; readonly socketOrigins: readonly string[] }): RequestHandler {
+export function securityHeaders(site: {
+  readonly tls: boolean;
+  readonly socketOrigins: readonly string[];
+}): RequestHandler {
   return helmet({
     contentSecurityPolicy: {
       useDefaults: false,

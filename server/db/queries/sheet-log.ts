@@ -22,7 +22,9 @@ export function appendUpdates(db: Db, sheetId: string, updates: readonly Uint8Ar
 }
 
 export function insertUpdate(db: Db, sheetId: string, update: Uint8Array): void {
-  db.insert(sheetUpdates).values({ sheetId, content: Buffer.from(update) }).run();
+  db.insert(sheetUpdates)
+    .values({ sheetId, content: Buffer.from(update) })
+    .run();
 }
 
 /** Puts one row with the whole state in the place of every row there is. */

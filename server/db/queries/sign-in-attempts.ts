@@ -28,9 +28,7 @@ export function failuresFromAddress(db: Db, address: string, since: number): Att
   return db
     .select()
     .from(signInAttempts)
-    .where(
-      and(eq(signInAttempts.address, address), eq(signInAttempts.succeeded, false), gt(signInAttempts.at, since)),
-    )
+    .where(and(eq(signInAttempts.address, address), eq(signInAttempts.succeeded, false), gt(signInAttempts.at, since)))
     .orderBy(desc(signInAttempts.at), desc(signInAttempts.id))
     .all();
 }

@@ -1,6 +1,6 @@
+import { and, asc, count, eq } from 'drizzle-orm';
 import type { Role } from '#shared/access/roles';
 import type { OwnTeam } from '#shared/api/accounts';
-import { and, asc, count, eq } from 'drizzle-orm';
 import type { Db } from '../connect';
 import { memberships, people, teams } from '../schema';
 

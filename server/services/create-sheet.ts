@@ -1,0 +1,68 @@
+import { Refusal } from '#shared/api/refusal';
+import type { CreateSheetBody, SheetAnswer } from '#shared/api/sheets';
+import { circuitFileSchema } from '#shared/circuit/circuit-file';
+import type { Drawing } from '#shared/circuit/drawing';
+import { drawingOf } from '#shared/circuit/import-drawing';
+import type { ProblemCode } from '#shared/circuit/problem';
+import { readCircuit } from '#shared/circuit/read-circuit';
+import { BLANK_DRAWING, STARTERS } from '#shared/starters/starters';
+import { newId } from '../auth/tokens';
+import { insertUpdate } from '../db/queries/sheet-log';
+import { insertSheet } from '../db/queries/sheets';
+import { firstState } from '../sync/first-state';
+import type { Context } from './context';
+import { sheetAnswerOf } from './sheet-answer';
+import { requireTeam } from './team-access';
+import { tellTeam } from './tell-team';
+
+/**
+ * Makes a sheet: blank, from a starter, or from a circuit file. Its first state is stored with it, once; the live
+ * document is never filled a second time.
+ */
+export function createSheet(ctx: Context, teamId: string, body: CreateSheetBody, askerId: string): SheetAnswer {
+  const team = requireTeam(ctx.db, teamId, askerId, 'edit-sheet');
+  const state = firstState(drawingFor(body));
+  const now = ctx.now();
+  const sheet = {
+    id: newId(),
+    teamId,
+    name: body.name,
+    state: 'draft' as const,
+    archived: false,
+    createdBy: askerId,
+    createdAt: now,
+    changedAt: now,
+  };
+  ctx.db.transaction((tx) => {
+    insertSheet(tx, sheet);
+    insertUpdate(tx, sheet.id, state);
+  });
+  tellTeam(ctx, teamId, { kind: 'sheet', teamId, sheetId: sheet.id });
+  return { sheet: sheetAnswerOf(sheet), team };
+}
+
+function drawingFor({ starter, circuit }: CreateSheetBody): Drawing {
+  if (circuit !== undefined) return importDrawing(circuit);
+  if (starter === undefined) return BLANK_DRAWING;
+  const found = STARTERS.find(({ id }) => id === starter);
+  if (!found) {
+    const ids = STARTERS.map(({ id }) => id).join(', ');
+    throw new Refusal('invalid', 'There is no such starter.', { fields: { starter: `Choose one of ${ids}.` } });
+  }
+  return found.drawing;
+}
+
+/** Faults of the file itself. A circuit that only lacks a wire can be drawn, and mended on the sheet. */
+const UNREADABLE: readonly ProblemCode[] = ['bad-value', 'unknown-field', 'unknown-process', 'duplicate-ref'];
+const MOST_TOLD = 20;
+
+function importDrawing(input: unknown): Drawing {
+  const read = readCircuit(input);
+  const faults = read.ok ? [] : read.problems.filter(({ code }) => UNREADABLE.includes(code));
+  if (faults.length > 0) {
+    const told = faults.slice(0, MOST_TOLD).map(({ message }) => message);
+    if (faults.length > MOST_TOLD) told.push(`And ${faults.length - MOST_TOLD} more.`);
+    throw new Refusal('invalid', 'This circuit file cannot be drawn.', { fields: { circuit: told.join('\n') } });
+  }
+  return drawingOf(circuitFileSchema.parse(input));
+}
