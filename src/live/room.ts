@@ -6,7 +6,7 @@ import { StoredChanges } from './stored-changes';
 
 /** How the live connection stands, and whether what was drawn here is safe. */
 export type RoomState =
-  | { readonly kind: 'opening' }
+  | { readonly kind: 'opening'; readonly unreachable: boolean }
   | { readonly kind: 'live'; readonly notStored: number }
   | { readonly kind: 'offline'; readonly notStored: number }
   | { readonly kind: 'refused'; readonly why: 'signed-out' | 'forbidden' | 'not-found' };
@@ -40,20 +40,25 @@ export function openRoom(sheetId: string, onDenied: () => void): Room {
   });
 
   const listeners = new Set<() => void>();
-  let state: RoomState = { kind: 'opening' };
+  let state: RoomState = { kind: 'opening', unreachable: false };
   let wasLive = false;
+  let unreachable = false;
   const changed = () => {
     if (state.kind !== 'refused') {
       if (provider.synced) {
         wasLive = true;
         state = { kind: 'live', notStored: stored.notStored };
-      } else state = wasLive ? { kind: 'offline', notStored: stored.notStored } : { kind: 'opening' };
+      } else state = wasLive ? { kind: 'offline', notStored: stored.notStored } : { kind: 'opening', unreachable };
     }
     for (const listener of listeners) listener();
   };
   const stored = new StoredChanges(provider, changed);
   provider.on('sync', changed);
   provider.on('status', changed);
+  provider.on('connection-error', () => {
+    unreachable = true;
+    changed();
+  });
   provider.on('closed', ({ code }) => {
     state = { kind: 'refused', why: REFUSALS[code] ?? 'forbidden' };
     changed();

@@ -1,7 +1,7 @@
 import { useCallback, useEffect, useState, useSyncExternalStore } from 'react';
 import { openRoom, type Room, type RoomState } from './room';
 
-const OPENING: RoomState = { kind: 'opening' };
+const OPENING: RoomState = { kind: 'opening', unreachable: false };
 
 /** The live room of a sheet for as long as the component is there; `onDenied` must be stable. */
 export function useRoom(sheetId: string, onDenied: () => void): { room: Room | undefined; state: RoomState } {
