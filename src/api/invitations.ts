@@ -10,11 +10,10 @@ import { call, callForNothing } from './client';
 import { keys } from './keys';
 
 /** The team's open invitations; only owners may ask. */
-export function useInvitations(teamId: string, enabled: boolean) {
+export function useInvitations(teamId: string) {
   return useQuery({
     queryKey: keys.invitations(teamId),
     queryFn: async () => (await call('GET', `/api/teams/${teamId}/invitations`, invitationsAnswer)).invitations,
-    enabled,
   });
 }
 

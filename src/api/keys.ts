@@ -4,6 +4,7 @@ export const keys = {
   members: (teamId: string) => ['teams', teamId, 'members'] as const,
   invitations: (teamId: string) => ['teams', teamId, 'invitations'] as const,
   sheets: (teamId: string) => ['teams', teamId, 'sheets'] as const,
+  everySheet: ['sheets'] as const,
   sheet: (sheetId: string) => ['sheets', sheetId] as const,
   invitation: (token: string) => ['invitation', token] as const,
 };
