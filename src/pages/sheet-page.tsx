@@ -1,0 +1,101 @@
+import { useCallback, useState } from 'react';
+import { useParams } from 'react-router-dom';
+import type { SheetAnswer } from '#shared/api/sheets';
+import { ApiError } from '../api/client';
+import { useSheet } from '../api/sheets';
+import { useRoom } from '../live/use-room';
+import { ButtonLink } from '../ui/button';
+import { Empty, Failure } from '../ui/notice';
+import { useStatus } from '../ui/status';
+import { Waiting } from '../ui/waiting';
+import { SheetDesk } from './sheet-desk';
+
+/** `/sheets/:sheetId`: the live sheet. */
+export default function SheetPage() {
+  const { sheetId = '' } = useParams();
+  const answer = useSheet(sheetId);
+  if (answer.isSuccess) return <LiveSheet key={sheetId} answer={answer.data} refetch={() => void answer.refetch()} />;
+  return (
+    <main id="main" className="mx-auto max-w-2xl px-4 py-10">
+      {answer.isPending ? (
+        <Waiting>Opening the sheet…</Waiting>
+      ) : (
+        <NotOpened error={answer.error} retry={() => void answer.refetch()} />
+      )}
+    </main>
+  );
+}
+
+function NotOpened({ error, retry }: { error: Error; retry: () => void }) {
+  if (error instanceof ApiError && error.status === 404) {
+    return (
+      <Empty title="There is no such sheet, or it is not yours to see.">
+        <p>Check the address, or ask whoever sent it to invite you to the team it belongs to.</p>
+        <ButtonLink to="/">Go to your sheets</ButtonLink>
+      </Empty>
+    );
+  }
+  return <Failure onRetry={retry}>The sheet could not be opened. {error.message}</Failure>;
+}
+
+/** The live connection to a sheet; begun anew after the server refused a change, for then the copy here is not the shared one. */
+function LiveSheet({ answer, refetch }: { answer: SheetAnswer; refetch: () => void }) {
+  const [attempt, setAttempt] = useState(0);
+  const { warn } = useStatus();
+  const onDenied = useCallback(() => {
+    warn('Your last change was not shared: you may only look at this sheet now. It shows what everyone else sees.');
+    setAttempt((before) => before + 1);
+    refetch();
+  }, [warn, refetch]);
+  return <ConnectedSheet key={attempt} answer={answer} onDenied={onDenied} />;
+}
+
+function ConnectedSheet({ answer, onDenied }: { answer: SheetAnswer; onDenied: () => void }) {
+  const { room, state } = useRoom(answer.sheet.id, onDenied);
+  if (state.kind === 'refused') {
+    return (
+      <main id="main" className="mx-auto max-w-2xl px-4 py-10">
+        <Refused why={state.why} />
+      </main>
+    );
+  }
+  if (!room || state.kind === 'opening') {
+    return (
+      <main id="main" className="mx-auto max-w-2xl px-4 py-10">
+        <Waiting>
+          {state.kind === 'opening' && state.unreachable
+            ? 'The server cannot be reached; trying again. Check the connection.'
+            : 'Opening the sheet…'}
+        </Waiting>
+      </main>
+    );
+  }
+  return <SheetDesk room={room} state={state} answer={answer} />;
+}
+
+function Refused({ why }: { why: 'signed-out' | 'forbidden' | 'not-found' }) {
+  switch (why) {
+    case 'signed-out':
+      return (
+        <Empty title="You are signed out.">
+          <p>What you drew until then is saved.</p>
+          <ButtonLink to="/sign-in" reloadDocument>
+            Sign in
+          </ButtonLink>
+        </Empty>
+      );
+    case 'forbidden':
+      return (
+        <Empty title="You may no longer open this sheet.">
+          <p>You were taken out of its team. Ask one of its owners if that was not meant.</p>
+          <ButtonLink to="/">Go to your sheets</ButtonLink>
+        </Empty>
+      );
+    case 'not-found':
+      return (
+        <Empty title="This sheet is no longer there.">
+          <ButtonLink to="/">Go to your sheets</ButtonLink>
+        </Empty>
+      );
+  }
+}
