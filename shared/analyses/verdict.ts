@@ -12,6 +12,9 @@ export type Standing = {
   readonly slack: number;
 };
 
+/** V: a margin this little short of what was asked is equal to it, since no solution is computed finer. */
+const SAME = 1e-9;
+
 /**
  * How a device stands against its intent. The region itself comes before any margin: an off device can have a large
  * saturation margin and still misses an intent to be saturated.
@@ -22,7 +25,7 @@ export function standingOf(
 ): Standing {
   const margin = marginIn(region, point);
   const slack = margin - asked;
-  const verdict = point.region !== region ? 'missed' : slack < 0 ? 'thin' : 'met';
+  const verdict = point.region !== region ? 'missed' : slack < -SAME ? 'thin' : 'met';
   return { verdict, margin, slack };
 }
 

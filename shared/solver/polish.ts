@@ -1,0 +1,79 @@
+import { type Equations, TRUE_CIRCUIT } from './equations';
+import { type FreeRange, findFreeRange } from './free-range';
+import { newton } from './newton';
+import { findUndrivenPieces, restUndrivenPieces, type UndrivenPiece } from './undriven-nets';
+
+/** S, the leakage that points are looked for with. */
+export const SEARCH_LEAKAGE = 1e-12;
+/** Smaller leakages, tried in turn, tell a device that carries picoamperes from one that only leaks. */
+const FINER_LEAKAGES = [1e-14, 1e-16];
+const MOST_ITERATIONS = 80;
+const MOST_ROUNDS = 6;
+/** V, within which a held net must come to rest from one round to the next. */
+const AT_REST = 1e-12;
+/** The share of a piece's forced currents within which they cancel. */
+const BALANCE = 1e-12;
+
+export type Polished =
+  | {
+      readonly kind: 'point';
+      /** V by group, of the true circuit. */
+      readonly x: Float64Array;
+      readonly undriven: readonly UndrivenPiece[];
+      /** NaN where free, else the voltage an undriven group rests at. */
+      readonly held: Float64Array;
+      readonly iterations: number;
+    }
+  | { readonly kind: 'free-range'; readonly range: FreeRange; readonly iterations: number }
+  | { readonly kind: 'none'; readonly iterations: number };
+
+/** Takes a point found with `SEARCH_LEAKAGE` to the circuit's own equations, without leakage, or tells why there is none near. */
+export function polish(equations: Equations, found: Float64Array): Polished {
+  const x = found.slice();
+  let iterations = 0;
+  let leakage = SEARCH_LEAKAGE;
+  for (const finer of FINER_LEAKAGES) {
+    const trial = x.slice();
+    const result = newton(equations, trial, { leakage: finer, supply: 1 }, MOST_ITERATIONS);
+    iterations += result.iterations;
+    if (result.status !== 'converged') break;
+    x.set(trial);
+    leakage = finer;
+  }
+
+  const undriven = findUndrivenPieces(equations, x, leakage);
+  for (const piece of undriven) {
+    if (piece.forcedThroughput === 0) continue;
+    if (Math.abs(piece.forced) > BALANCE * piece.forcedThroughput) return { kind: 'none', iterations };
+    return { kind: 'free-range', range: { groups: piece.groups }, iterations };
+  }
+
+  const held = new Float64Array(equations.size).fill(Number.NaN);
+  for (let round = 0; round < MOST_ROUNDS; round++) {
+    restUndrivenPieces(equations, x, undriven);
+    let moved = round === 0 ? Number.POSITIVE_INFINITY : 0;
+    for (const { groups } of undriven) {
+      const anchor = groups[0] ?? 0;
+      moved = Math.max(moved, Math.abs((x[anchor] ?? 0) - (held[anchor] ?? 0)));
+      held[anchor] = x[anchor] ?? 0;
+    }
+    if (moved <= AT_REST) break;
+    const result = newton(equations, x, { ...TRUE_CIRCUIT, held }, MOST_ITERATIONS);
+    iterations += result.iterations;
+    if (result.status !== 'converged') {
+      const range = findFreeRange(equations, result.status === 'singular' ? found : x, held);
+      return range ? { kind: 'free-range', range, iterations } : { kind: 'none', iterations };
+    }
+    if (undriven.length === 0) break;
+  }
+  const range = findFreeRange(equations, x, held);
+  if (range) return { kind: 'free-range', range, iterations };
+  return balances(equations, x) ? { kind: 'point', x, undriven, held, iterations } : { kind: 'none', iterations };
+}
+
+/** Whether all currents cancel to rounding at every net, held ones included. */
+function balances(equations: Equations, x: Float64Array): boolean {
+  equations.evaluate(x, TRUE_CIRCUIT);
+  const { residual, throughput } = equations;
+  return residual.every((sum, group) => Math.abs(sum) <= 1e-8 * (throughput[group] ?? 0) + 1e-16);
+}

@@ -1,0 +1,125 @@
+import { type Equations, TRUE_CIRCUIT } from './equations';
+import type { FreeRange } from './free-range';
+import { stepLeakage } from './leakage-stepping';
+import { type NewtonResult, newton } from './newton';
+import { type Polished, polish, SEARCH_LEAKAGE } from './polish';
+import { settleInPseudoTime } from './pseudo-transient';
+import { measure, rank } from './ranking';
+import { stepSources } from './source-stepping';
+import { growingDirection, isSurelyUnstable } from './stability';
+import { startingPoints } from './starting-points';
+import type { UndrivenPiece } from './undriven-nets';
+
+/** A solution of the true circuit. */
+export interface Point {
+  readonly kind: 'point';
+  /** V by group. */
+  readonly x: Float64Array;
+  readonly undriven: readonly UndrivenPiece[];
+  readonly surelyUnstable: boolean;
+  readonly iterations: number;
+}
+
+export type Settled =
+  | Point
+  | { readonly kind: 'free-range'; readonly range: FreeRange; readonly iterations: number }
+  /** `x` is the attempt with the least remaining current; the true circuit's residual there is the caller's to read. */
+  | { readonly kind: 'none'; readonly x: Float64Array; readonly iterations: number };
+
+const NEWTON_ITERATIONS = 60;
+/** Unknowns above which further starts cost more than they are likely to find. */
+const MOST_UNKNOWNS_FOR_MORE_STARTS = 200;
+/** V, how far a circuit is pushed from an unstable point to see where it goes. */
+const PUSH = 0.1;
+
+/**
+ * Finds an operating point of a circuit and, of those that a fixed set of starts leads to, the one that is listed first: not
+ * surely unstable, then with most FETs on, then with the greatest power. Nothing but the circuit decides.
+ */
+export function settle(equations: Equations): Settled {
+  const points: Point[] = [];
+  let failure: Exclude<Settled, Point> | null = null;
+  let iterations = 0;
+  for (const start of startingPoints(equations)) {
+    const settled = settleFrom(equations, start);
+    iterations += settled.iterations;
+    if (settled.kind === 'point') {
+      points.push(settled);
+      const allOn = measure(equations, settled.x).on === equations.network.fets.length;
+      if (allOn && !settled.surelyUnstable) break;
+    } else {
+      failure = graver(equations, failure, settled);
+      if (settled.kind === 'free-range') break;
+    }
+    if (equations.size > MOST_UNKNOWNS_FOR_MORE_STARTS && points.length > 0) break;
+  }
+  const [first] = rank(equations, points);
+  if (first?.surelyUnstable) {
+    for (const settled of leave(equations, first)) {
+      iterations += settled.iterations;
+      if (settled.kind === 'point') points.push(settled);
+    }
+  }
+  const chosen = rank(equations, points)[0] ?? failure;
+  return chosen ? { ...chosen, iterations } : { kind: 'none', x: new Float64Array(equations.size), iterations };
+}
+
+/** Of two failures the one that says more: a free range, else the one nearer to balance. */
+function graver(
+  equations: Equations,
+  one: Exclude<Settled, Point> | null,
+  other: Exclude<Settled, Point>,
+): Exclude<Settled, Point> {
+  if (one === null || other.kind === 'free-range') return other;
+  if (one.kind === 'free-range') return one;
+  return imbalance(equations, other.x) < imbalance(equations, one.x) ? other : one;
+}
+
+/** Newton's method from a start; where it fails, leakage stepping, source stepping, pseudo-transient continuation. */
+export function settleFrom(equations: Equations, start: Float64Array): Settled {
+  const methods: ((x: Float64Array) => NewtonResult)[] = [
+    (x) => newton(equations, x, { leakage: SEARCH_LEAKAGE, supply: 1 }, NEWTON_ITERATIONS),
+    (x) => stepLeakage(equations, x, SEARCH_LEAKAGE),
+    (x) => stepSources(equations, x, SEARCH_LEAKAGE),
+    (x) => settleInPseudoTime(equations, x, SEARCH_LEAKAGE),
+  ];
+  let iterations = 0;
+  let nearest = start;
+  for (const method of methods) {
+    const x = start.slice();
+    const result = method(x);
+    iterations += result.iterations;
+    if (x.every(Number.isFinite) && imbalance(equations, x) < imbalance(equations, nearest)) nearest = x;
+    if (result.status !== 'converged') continue;
+    const polished = polish(equations, x);
+    iterations += polished.iterations;
+    if (polished.kind === 'free-range') return { ...polished, iterations };
+    if (polished.kind === 'point') return judged(equations, polished, iterations);
+  }
+  return { kind: 'none', x: nearest, iterations };
+}
+
+function judged(equations: Equations, point: Extract<Polished, { kind: 'point' }>, iterations: number): Point {
+  const surelyUnstable = isSurelyUnstable(equations, point.x, point.held);
+  return { kind: 'point', x: point.x, undriven: point.undriven, surelyUnstable, iterations };
+}
+
+/** Where the circuit goes when it is pushed off an unstable point to either side. */
+function leave(equations: Equations, point: Point): Settled[] {
+  const held = new Float64Array(equations.size).fill(Number.NaN);
+  for (const { groups } of point.undriven) held[groups[0] ?? 0] = point.x[groups[0] ?? 0] ?? 0;
+  const direction = growingDirection(equations, point.x, held);
+  return [PUSH, -PUSH].map((push) => {
+    const x = point.x.map((voltage, i) => voltage + push * (direction[i] ?? 0));
+    const result = settleInPseudoTime(equations, x, SEARCH_LEAKAGE);
+    const polished = result.status === 'converged' ? polish(equations, x) : null;
+    const iterations = result.iterations + (polished?.iterations ?? 0);
+    return polished?.kind === 'point' ? judged(equations, polished, iterations) : { kind: 'none', x, iterations };
+  });
+}
+
+/** A, the largest sum of currents at any group of the true circuit. */
+export function imbalance(equations: Equations, x: Float64Array): number {
+  equations.evaluate(x, TRUE_CIRCUIT);
+  return equations.residual.reduce((most, sum) => Math.max(most, Math.abs(sum)), 0);
+}
