@@ -69,14 +69,16 @@ test('wires are orthogonal, begin and end at their terminals, and visit chosen c
   );
 });
 
-test('a wire leaves its terminals forwards where it can', () => {
-  // From a drain that leaves upwards to one that leaves upwards at the same height: over the top, not through the symbols.
-  const up = { x: 0, y: -1 };
-  const line = routeWire({ at: { x: 0, y: 0 }, leaves: up }, { at: { x: 100, y: 0 }, leaves: up });
+test('a wire never runs back through the symbol it leaves', () => {
+  // From an upper end that leaves upwards to a lower one that leaves downwards: around, not straight through both.
+  const line = routeWire(
+    { at: { x: 0, y: 0 }, leaves: { x: 0, y: -1 } },
+    { at: { x: 0, y: 100 }, leaves: { x: 0, y: 1 } },
+  );
   expect(line).toEqual([
     { x: 0, y: 0 },
-    { x: 0, y: -20 },
-    { x: 100, y: -20 },
-    { x: 100, y: 0 },
+    { x: -20, y: 0 },
+    { x: -20, y: 100 },
+    { x: 0, y: 100 },
   ]);
 });
