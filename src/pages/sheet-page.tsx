@@ -10,9 +10,9 @@ import { useStatus } from '../ui/status';
 import { Waiting } from '../ui/waiting';
 import { SheetDesk } from './sheet-desk';
 
-/** `/sheets/:sheetId`: the live sheet. */
+/** `/sheets/:id`: the live sheet. */
 export default function SheetPage() {
-  const { sheetId = '' } = useParams();
+  const { id: sheetId = '' } = useParams();
   const answer = useSheet(sheetId);
   if (answer.isSuccess) return <LiveSheet key={sheetId} answer={answer.data} refetch={() => void answer.refetch()} />;
   return (
