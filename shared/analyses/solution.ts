@@ -8,6 +8,9 @@ import type { FetPoint, ResistorPoint, Solution, SourcePoint } from './operating
 /** Ends of a channel that differ by less than this share of their voltage (or of 1 V) differ by rounding alone. */
 const ROUNDING = 1e-13;
 
+/** V: a net nearer to ground than this is at ground, whatever the last step of a solution left. */
+const NEGLIGIBLE = 1e-18;
+
 /** Every figure of a solution, and the largest sum of currents at any net (A). */
 export function describeSolution(
   equations: Equations,
@@ -16,7 +19,7 @@ export function describeSolution(
 ): { solution: Solution; residual: number } {
   const { network } = equations;
   equations.spreadVoltages(x);
-  const v = equations.netVoltages.slice();
+  const v = equations.netVoltages.map((voltage) => (Math.abs(voltage) < NEGLIGIBLE ? 0 : voltage));
   const at = (net: number): number => v[net] ?? 0;
   /** A, leaving each net through everything but voltage sources and inductors. */
   const leaving = new Float64Array(v.length);

@@ -94,6 +94,17 @@ export class Equations {
     }
   }
 
+  /** S, each current law's sum of slopes, from the Jacobian as it stands. */
+  conductances(into = new Float64Array(this.size)): Float64Array {
+    const { rows } = this.network.pattern;
+    into.fill(0);
+    for (let slot = 0; slot < rows.length; slot++) {
+      const row = rows[slot] ?? 0;
+      into[row] = (into[row] ?? 0) + Math.abs(this.jacobian[slot] ?? 0);
+    }
+    return into;
+  }
+
   #leave(net: number, current: number): void {
     const group = this.network.groupOf[net] ?? -1;
     if (group < 0) return;

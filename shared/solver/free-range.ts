@@ -6,8 +6,10 @@ export interface FreeRange {
   readonly groups: readonly number[];
 }
 
-/** A direction is suspect when following it 1 V changes no current by more than this share of its net's conductance. */
+/** A direction is suspect when following it 1 V changes no net's currents by more than this share of what flows there. */
 const SUSPECT = 1e-3;
+/** The share of a net's conductance that is rounding. */
+const NOISE = 1e-9;
 /** A, as a share of what flows at the net: less than this is rounding, so a real conductance or λ shows above it. */
 const ROUNDING = 1e-12;
 const INVERSE_ITERATIONS = 4;
@@ -45,14 +47,11 @@ export function findFreeRange(equations: Equations, x: Float64Array, held: Float
 
 /** The direction, largest entry 1, along which the scaled currents change least; null when all change clearly. */
 function leastResistedDirection(equations: Equations, x: Float64Array, conditions: Conditions): Float64Array | null {
-  const { size, jacobian, lu, network } = equations;
+  const { size, jacobian, throughput, lu, network } = equations;
   if (size === 0) return null;
   equations.evaluate(x, conditions);
   const { starts, rows } = network.pattern;
-  const conductance = new Float64Array(size);
-  for (const [slot, row] of rows.entries()) {
-    conductance[row] = (conductance[row] ?? 0) + Math.abs(jacobian[slot] ?? 0);
-  }
+  const conductance = equations.conductances();
   const bare = jacobian.slice();
   for (const [group, slot] of network.diagonal.entries()) {
     jacobian[slot] = (jacobian[slot] ?? 0) + 1e-12 * (conductance[group] ?? 0) + 1e-18;
@@ -73,6 +72,8 @@ function leastResistedDirection(equations: Equations, x: Float64Array, condition
       change[row] = (change[row] ?? 0) + (bare[slot] ?? 0) * (direction[column] ?? 0);
     }
   }
-  const clear = change.some((sum, row) => Math.abs(sum) > SUSPECT * (conductance[row] ?? 0));
+  const clear = change.some(
+    (sum, row) => Math.abs(sum) > SUSPECT * (throughput[row] ?? 0) + NOISE * (conductance[row] ?? 0),
+  );
   return clear ? null : direction;
 }

@@ -43,7 +43,8 @@ export function newton(
     lu.solve(step);
     if (!step.every(Number.isFinite)) return { status: 'singular', iterations: iteration };
 
-    weighRows(equations, weight);
+    equations.conductances(weight);
+    for (let i = 0; i < size; i++) weight[i] = 1 / (weight[i] ?? 1);
     const before = norm(residual, weight);
     if (isSmall(step, x)) {
       advance(x, step, 1, trial);
@@ -80,17 +81,6 @@ function advance(x: Float64Array, step: Float64Array, share: number, into: Float
 
 function isSmall(step: Float64Array, x: Float64Array): boolean {
   return step.every((change, i) => Math.abs(change) <= STEP_ABSOLUTE + STEP_RELATIVE * Math.abs(x[i] ?? 0));
-}
-
-/** One over each row's sum of conductances, which turns its current into volts. */
-function weighRows(equations: Equations, weight: Float64Array): void {
-  const { rows } = equations.network.pattern;
-  weight.fill(0);
-  for (let slot = 0; slot < rows.length; slot++) {
-    const row = rows[slot] ?? 0;
-    weight[row] = (weight[row] ?? 0) + Math.abs(equations.jacobian[slot] ?? 0);
-  }
-  for (let i = 0; i < weight.length; i++) weight[i] = 1 / (weight[i] ?? 1);
 }
 
 function norm(residual: Float64Array, weight: Float64Array): number {

@@ -75,5 +75,8 @@ export function polish(equations: Equations, found: Float64Array): Polished {
 function balances(equations: Equations, x: Float64Array): boolean {
   equations.evaluate(x, TRUE_CIRCUIT);
   const { residual, throughput } = equations;
-  return residual.every((sum, group) => Math.abs(sum) <= 1e-8 * (throughput[group] ?? 0) + 1e-16);
+  const conductance = equations.conductances();
+  return residual.every(
+    (sum, group) => Math.abs(sum) <= 1e-8 * (throughput[group] ?? 0) + 1e-9 * (conductance[group] ?? 0) + 1e-18,
+  );
 }

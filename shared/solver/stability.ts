@@ -19,11 +19,9 @@ export function growingDirection(equations: Equations, x: Float64Array, held: Fl
   const { size, network, jacobian, lu } = equations;
   const direction = Float64Array.from({ length: size }, (_, i) => 1 + ((i * 0.618034) % 1));
   equations.evaluate(x, { ...TRUE_CIRCUIT, held });
-  const sums = new Float64Array(size);
-  for (const [slot, row] of network.pattern.rows.entries()) {
-    sums[row] = (sums[row] ?? 0) + (Number.isNaN(held[row]) ? Math.abs(jacobian[slot] ?? 0) : 0);
-  }
-  const inertia = sums.reduce((most, sum) => Math.max(most, sum), 0);
+  const inertia = equations
+    .conductances()
+    .reduce((most, sum, i) => (Number.isNaN(held[i]) ? Math.max(most, sum) : most), 0);
   for (const slot of network.diagonal) jacobian[slot] = (jacobian[slot] ?? 0) + inertia;
   if (!lu.factor(jacobian)) return direction;
   for (let iteration = 0; iteration < POWER_ITERATIONS; iteration++) {
