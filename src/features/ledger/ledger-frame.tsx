@@ -1,0 +1,77 @@
+import { ChevronDown, ChevronUp } from 'lucide-react';
+import { type KeyboardEvent, type PointerEvent, type ReactNode, useState } from 'react';
+
+const FIRST_HEIGHT = 216;
+const LEAST = 80;
+const MOST = 640;
+const STEP = 24;
+
+/** The ledger's place at the foot of the sheet: as high as it is dragged, or down to its one line of tabs. */
+export function LedgerFrame({
+  collapsed,
+  onCollapse,
+  tabs,
+  children,
+}: {
+  collapsed: boolean;
+  onCollapse: (collapsed: boolean) => void;
+  tabs: ReactNode;
+  children: ReactNode;
+}) {
+  const [height, setHeight] = useState(FIRST_HEIGHT);
+  const resize = (next: number) => {
+    onCollapse(next < LEAST);
+    setHeight(Math.min(MOST, Math.max(LEAST, next)));
+  };
+  const drag = (event: PointerEvent<HTMLElement>) => {
+    if (!event.currentTarget.hasPointerCapture(event.pointerId)) return;
+    const foot = event.currentTarget.parentElement?.getBoundingClientRect().bottom ?? 0;
+    resize(foot - event.clientY);
+  };
+  const press = (event: KeyboardEvent) => {
+    const next = { ArrowUp: height + STEP, ArrowDown: height - STEP, Home: LEAST, End: MOST }[event.key];
+    if (event.key === 'Enter') onCollapse(!collapsed);
+    else if (next === undefined) return;
+    else if (collapsed) onCollapse(false);
+    else resize(next);
+    event.preventDefault();
+  };
+
+  return (
+    <section
+      aria-label="Ledger"
+      className="relative flex max-h-[60dvh] shrink-0 flex-col border-rule border-t bg-paper"
+      style={{ height: collapsed ? undefined : height }}
+    >
+      {/* biome-ignore lint/a11y/useSemanticElements: a separator that is dragged takes the focus, which hr cannot say */}
+      <div
+        role="separator"
+        aria-orientation="horizontal"
+        aria-label="Height of the ledger"
+        aria-valuemin={LEAST}
+        aria-valuemax={MOST}
+        aria-valuenow={collapsed ? LEAST : height}
+        tabIndex={0}
+        className="-top-3 absolute left-1/2 z-20 flex h-6 w-16 -translate-x-1/2 cursor-row-resize touch-none items-center justify-center"
+        onPointerDown={(event) => event.currentTarget.setPointerCapture(event.pointerId)}
+        onPointerMove={drag}
+        onKeyDown={press}
+      >
+        <span className="h-[5px] w-6 border-faint border-y bg-paper" />
+      </div>
+      <div className="flex items-center gap-2 pr-2 sm:pr-4">
+        {tabs}
+        <button
+          type="button"
+          aria-expanded={!collapsed}
+          aria-label="Ledger"
+          className="ml-auto grid size-7 place-items-center text-faint hover:text-ink"
+          onClick={() => onCollapse(!collapsed)}
+        >
+          {collapsed ? <ChevronUp size={16} aria-hidden="true" /> : <ChevronDown size={16} aria-hidden="true" />}
+        </button>
+      </div>
+      {!collapsed && <div className="min-h-0 flex-1 overflow-auto">{children}</div>}
+    </section>
+  );
+}

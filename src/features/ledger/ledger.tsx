@@ -1,0 +1,160 @@
+import { Tabs } from 'radix-ui';
+import { useMemo, useState } from 'react';
+import { type Drawing, isComponent, type PartId } from '#shared/circuit/drawing';
+import type { DrawnNets } from '#shared/circuit/nets';
+import type { Selection } from '../../live/selection';
+import { type Solution, useSolution, useVdsScale } from '../../workers/solution';
+import { fetRows } from './fet-rows';
+import { FetTable } from './fet-table';
+import { LedgerFrame } from './ledger-frame';
+import { netRows, partRows } from './part-rows';
+import { NetTable, PartTable } from './part-table';
+import { ProblemList } from './problem-list';
+
+type LedgerProps = {
+  drawing: Drawing;
+  nets: DrawnNets;
+  selection: Selection;
+  onSelect(selection: Selection): void;
+  /** The part to light in the drawing while its row is pointed at or focused. */
+  onLight(part: PartId | undefined): void;
+  /** Bring this part into view. */
+  onFrame(part: PartId): void;
+};
+
+type Tab = 'fets' | 'parts' | 'nets' | 'problems';
+
+/** The tables under the drawing. They hold all that the drawing holds, and the same figures. */
+export function Ledger({ drawing, nets, selection, onSelect, onLight, onFrame }: LedgerProps) {
+  const solution = useSolution();
+  const scaleEnd = useVdsScale();
+  const [tab, setTab] = useState<Tab>('fets');
+  const [collapsed, setCollapsed] = useState(false);
+
+  const record = 'record' in solution ? solution.record : undefined;
+  const solved = record?.status === 'solved' ? record : undefined;
+  const rows = useMemo(
+    () => ({
+      fets: fetRows(drawing, solved),
+      parts: partRows(drawing, solved),
+      nets: netRows(drawing, nets, solved),
+    }),
+    [drawing, nets, solved],
+  );
+  const problems = record?.problems ?? [];
+  const empty = !drawing.parts.some(isComponent);
+  const goTo = (part: PartId) => {
+    onSelect({ parts: new Set([part]), wires: new Set() });
+    onFrame(part);
+  };
+  const common = {
+    selected: selection.parts,
+    busy: solution.state === 'outdated' || solution.state === 'pending',
+    onLight,
+    onFrame: goTo,
+  };
+  const open = (next: Tab) => {
+    setTab(next);
+    setCollapsed(false);
+  };
+
+  return (
+    <Tabs.Root value={tab} onValueChange={(next) => open(next as Tab)}>
+      <LedgerFrame
+        collapsed={collapsed}
+        onCollapse={setCollapsed}
+        tabs={
+          <Tabs.List aria-label="Tables" className="flex flex-wrap gap-x-4 pl-4 text-xs sm:pl-6">
+            <TabName tab="fets" count={rows.fets.length} onOpen={open}>
+              FETs
+            </TabName>
+            <TabName tab="parts" count={rows.parts.length} onOpen={open}>
+              other parts
+            </TabName>
+            <TabName tab="nets" count={rows.nets.length} onOpen={open}>
+              nets
+            </TabName>
+            <TabName tab="problems" count={empty ? 0 : problems.length} onOpen={open}>
+              problems
+            </TabName>
+          </Tabs.List>
+        }
+      >
+        {empty ? (
+          <p className="px-4 py-3 text-xs sm:px-6">
+            Nothing is drawn yet. To begin, choose a part from the tray, or press its letter while the drawing has the
+            focus, then place it; each FET gets its row here.
+          </p>
+        ) : (
+          <>
+            {tab !== 'problems' && <Unsolved solution={solution} drawing={drawing} onFrame={goTo} />}
+            <Tabs.Content value="fets">
+              {rows.fets.length > 0 ? (
+                <FetTable rows={rows.fets} scaleEnd={scaleEnd} {...common} />
+              ) : (
+                <p className="px-4 py-3 text-faint text-xs sm:px-6">There is no FET on this sheet yet.</p>
+              )}
+            </Tabs.Content>
+            <Tabs.Content value="parts">
+              <PartTable rows={rows.parts} {...common} />
+            </Tabs.Content>
+            <Tabs.Content value="nets">
+              <NetTable rows={rows.nets} {...common} />
+            </Tabs.Content>
+            <Tabs.Content value="problems">
+              {problems.length > 0 ? (
+                <ProblemList problems={problems} drawing={drawing} onFrame={goTo} />
+              ) : (
+                <p className="px-4 py-3 text-faint text-xs sm:px-6">No problem was found.</p>
+              )}
+            </Tabs.Content>
+          </>
+        )}
+      </LedgerFrame>
+    </Tabs.Root>
+  );
+}
+
+function TabName({
+  tab,
+  count,
+  onOpen,
+  children,
+}: {
+  tab: Tab;
+  count: number;
+  onOpen: (tab: Tab) => void;
+  children: string;
+}) {
+  return (
+    <Tabs.Trigger
+      value={tab}
+      // A tab that is chosen already opens a collapsed ledger too.
+      onClick={() => onOpen(tab)}
+      className="min-h-7 border-transparent border-b text-faint hover:text-ink data-[state=active]:border-ink data-[state=active]:text-ink"
+    >
+      {children} {count}
+    </Tabs.Trigger>
+  );
+}
+
+/** Why there are no figures. */
+function Unsolved({
+  solution,
+  drawing,
+  onFrame,
+}: {
+  solution: Solution;
+  drawing: Drawing;
+  onFrame: (part: PartId) => void;
+}) {
+  if (solution.state === 'failed') return <p className="px-4 py-2 text-missed text-xs sm:px-6">{solution.reason}</p>;
+  if (solution.state === 'pending' || solution.record.status === 'solved') return null;
+  const errors = solution.record.problems.filter(({ severity }) => severity === 'error');
+  return (
+    <div aria-busy={solution.state === 'outdated'} className={solution.state === 'outdated' ? 'opacity-45' : undefined}>
+      <p className="px-4 pt-2 font-bold text-missed text-xs sm:px-6">The circuit could not be solved.</p>
+      <ProblemList problems={errors} drawing={drawing} onFrame={onFrame} />
+    </div>
+  );
+}

@@ -1,0 +1,69 @@
+import type { OperatingPointRecord } from '#shared/analyses/operating-point-record';
+import { valueFields } from '#shared/circuit/catalogue';
+import { type Drawing, type DrawnComponent, isComponent, isFet } from '#shared/circuit/drawing';
+import { type DrawnNets, terminalKey } from '#shared/circuit/nets';
+import { byReference } from '#shared/circuit/reference-order';
+import { formatValue } from '#shared/units/format-value';
+
+/** A part that is no FET, with its figures where the circuit is solved and the record has them. */
+export type PartRow = {
+  readonly part: DrawnComponent;
+  readonly value: string;
+  readonly voltage: number | undefined;
+  readonly current: number | undefined;
+  readonly power: number | undefined;
+};
+
+export function partRows(drawing: Drawing, record: OperatingPointRecord | undefined): PartRow[] {
+  return drawing.parts
+    .filter(isComponent)
+    .filter((part) => !isFet(part))
+    .sort((a, b) => byReference(a.ref, b.ref))
+    .map((part) => {
+      const point = record && (own(record.sources, part.ref) ?? own(record.resistors, part.ref));
+      return { part, value: valueText(part), voltage: point?.voltage, current: point?.current, power: point?.power };
+    });
+}
+
+function valueText(part: DrawnComponent): string {
+  const values: Readonly<Record<string, unknown>> = part.values;
+  return valueFields(part)
+    .map(({ name, quantity }) => {
+      const value = values[name];
+      return typeof value === 'number' ? formatValue(value, quantity.unit) : '';
+    })
+    .join(' ');
+}
+
+/** A net of the sheet, with its voltage where the circuit is solved. */
+export type NetRow = {
+  readonly name: string;
+  readonly voltage: number | undefined;
+  /** Its terminals as `Q1.drain`, those of symbols without a reference left out. */
+  readonly terminals: readonly string[];
+  /** The part to show for it. */
+  readonly part: DrawnComponent | undefined;
+};
+
+export function netRows(drawing: Drawing, nets: DrawnNets, record: OperatingPointRecord | undefined): NetRow[] {
+  const components = new Map(drawing.parts.filter(isComponent).map((part) => [part.id, part]));
+  const rows = [...nets.nets.values()].map(({ name, terminals }): NetRow => {
+    const ends = terminals
+      .flatMap(({ part: id, pin }) => {
+        const part = components.get(id);
+        return part && nets.netOf.has(terminalKey({ part: id, pin })) ? [{ part, pin }] : [];
+      })
+      .sort((a, b) => byReference(a.part.ref, b.part.ref));
+    return {
+      name,
+      voltage: record && own(record.nets, name),
+      terminals: ends.map(({ part, pin }) => `${part.ref}.${pin}`),
+      part: ends[0]?.part,
+    };
+  });
+  return rows.sort((a, b) => (a.name < b.name ? -1 : 1));
+}
+
+function own<T>(record: Readonly<Record<string, T>>, name: string): T | undefined {
+  return Object.hasOwn(record, name) ? record[name] : undefined;
+}

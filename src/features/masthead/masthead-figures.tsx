@@ -1,0 +1,59 @@
+import { ABSOLUTE_ZERO } from '#shared/circuit/circuit-file';
+import type { SheetSettings } from '#shared/circuit/drawing';
+import { formatExact, formatValue } from '#shared/units/format-value';
+import { type ParsedValue, parseValue } from '#shared/units/parse-value';
+import type { SheetCommands } from '../../live/sheet-commands';
+import { ValueField } from '../../ui/value-field';
+import { useSolution, useSolvedCircuit } from '../../workers/solution';
+import { ProblemSummary } from './problem-summary';
+import { sheetSummary } from './sheet-summary';
+import { VerdictCounts } from './verdict-counts';
+
+/** The sheet in one line: its temperature, the power its sources deliver, how its devices stand, and what is wrong. */
+export function MastheadFigures({ settings, commands }: { settings: SheetSettings; commands: SheetCommands }) {
+  const solution = useSolution();
+  const circuit = useSolvedCircuit();
+  const record = 'record' in solution && circuit && circuit.parts.length > 0 ? solution.record : undefined;
+  const summary = circuit && record?.status === 'solved' ? sheetSummary(circuit, record) : undefined;
+  const busy = solution.state === 'outdated' || solution.state === 'pending';
+  return (
+    <div className="flex flex-wrap items-center gap-x-5 gap-y-1">
+      <Temperature celsius={settings.temperature} commands={commands} />
+      <div aria-busy={busy} className={`flex flex-wrap items-center gap-x-5 gap-y-1 ${busy ? 'opacity-45' : ''}`}>
+        {summary && summary.power > 0 && (
+          <p>
+            <span className="sr-only">power delivered by all sources </span>
+            <span title={`${formatValue(summary.power, 'W', 4)} delivered by all sources`}>
+              {formatValue(summary.power, 'W')}
+            </span>
+          </p>
+        )}
+        {summary && <VerdictCounts counts={summary.verdicts} />}
+        {solution.state === 'failed' && <p className="max-w-96 text-missed text-xs">{solution.reason}</p>}
+        {record && <ProblemSummary record={record} />}
+      </div>
+    </div>
+  );
+}
+
+function Temperature({ celsius, commands }: { celsius: number; commands: SheetCommands }) {
+  if (!commands.canEdit) return <p>{formatExact(celsius, '°C')}</p>;
+  return (
+    <div className="w-20">
+      <ValueField
+        label="Temperature"
+        hideLabel
+        value={celsius}
+        show={(value) => formatExact(value, '°C')}
+        read={readTemperature}
+        onCommit={commands.setTemperature}
+      />
+    </div>
+  );
+}
+
+function readTemperature(text: string): ParsedValue {
+  const reading = parseValue(text, { unit: '°C' });
+  if (!reading.ok || reading.value > ABSOLUTE_ZERO) return reading;
+  return { ok: false, reason: `Absolute zero is ${ABSOLUTE_ZERO} °C: write a temperature above it.` };
+}

@@ -1,0 +1,107 @@
+import { X } from 'lucide-react';
+import { type KeyboardEvent, useEffect, useRef } from 'react';
+import { standingOf } from '#shared/analyses/verdict';
+import { catalogueEntry } from '#shared/circuit/catalogue';
+import { type DrawnFet, type DrawnPart, isComponent, isFet, type SheetSettings } from '#shared/circuit/drawing';
+import type { DrawnNets } from '#shared/circuit/nets';
+import { formatValue } from '#shared/units/format-value';
+import { REGION_COLOUR, RegionGlyph } from '../../formats/region-glyph';
+import { VerdictOutline } from '../../formats/verdict-outline';
+import type { SheetCommands } from '../../live/sheet-commands';
+import { ValueField } from '../../ui/value-field';
+import { useFetPoint, useSolution } from '../../workers/solution';
+import { PartFields } from './part-fields';
+import { readReference } from './read-fields';
+import { Standing } from './standing';
+
+type SlipProps = {
+  part: DrawnPart;
+  settings: SheetSettings;
+  nets: DrawnNets;
+  commands: SheetCommands;
+  onClose(): void;
+};
+
+/** The card at the selected part: its values, what it is meant to do, and how it stands. Whoever opens it places it. */
+export function Slip({ part, settings, nets, commands, onClose }: SlipProps) {
+  const card = useRef<HTMLElement>(null);
+  const firstField = useRef<HTMLInputElement>(null);
+  const verdict = useVerdict(part);
+
+  useEffect(() => {
+    (firstField.current ?? card.current)?.focus({ preventScroll: true });
+  }, []);
+
+  const press = (event: KeyboardEvent) => {
+    // What is typed here is for the card alone: letters place no part, Delete removes none.
+    event.stopPropagation();
+    if (event.key === 'Escape') onClose();
+  };
+
+  const name = isComponent(part) ? part.ref : catalogueEntry(part.kind).label;
+  const flagged = verdict === 'thin' || verdict === 'missed' ? verdict : undefined;
+  return (
+    <section
+      ref={card}
+      tabIndex={-1}
+      aria-label={`${name}: values`}
+      onKeyDown={press}
+      className={`relative isolate grid w-60 gap-2 p-3 text-xs shadow-slip outline-none ${
+        flagged ? '' : 'border border-edge bg-sheet'
+      }`}
+    >
+      {flagged && <VerdictOutline verdict={flagged} />}
+      <header className="flex min-h-6 items-center gap-2 pr-6">
+        <Name part={part} commands={commands} />
+        {isFet(part) && <RegionAndCurrent part={part} />}
+        <button
+          type="button"
+          aria-label="Close"
+          onClick={onClose}
+          className={`absolute right-2 grid size-6 place-items-center text-faint hover:text-ink ${flagged ? 'top-4' : 'top-3'}`}
+        >
+          <X size={14} aria-hidden="true" />
+        </button>
+      </header>
+      <PartFields part={part} settings={settings} nets={nets} commands={commands} firstField={firstField} />
+      {isFet(part) && <Standing part={part} />}
+    </section>
+  );
+}
+
+function Name({ part, commands }: { part: DrawnPart; commands: SheetCommands }) {
+  if (!isComponent(part)) return <h2 className="font-bold text-sm">{catalogueEntry(part.kind).label}</h2>;
+  if (!commands.canEdit) return <h2 className="font-bold text-sm">{part.ref}</h2>;
+  return (
+    <div className="min-w-0 flex-1">
+      <ValueField
+        label="reference"
+        hideLabel
+        value={part.ref}
+        show={(ref) => ref}
+        read={readReference}
+        onCommit={(ref) => commands.setReference(part, ref)}
+        className="font-bold text-sm"
+      />
+    </div>
+  );
+}
+
+function RegionAndCurrent({ part }: { part: DrawnFet }) {
+  const point = useFetPoint(part.ref);
+  const { state } = useSolution();
+  const busy = state !== 'current' && state !== 'failed';
+  if (!point) return <p className="text-faint">{busy ? 'solving' : 'not solved'}</p>;
+  return (
+    <p aria-busy={busy} className={`flex items-center gap-1.5 ${busy ? 'opacity-45' : ''}`}>
+      <RegionGlyph region={point.region} />
+      <span className={`font-bold ${REGION_COLOUR[point.region]}`}>{point.region}</span>
+      <span title={formatValue(point.id, 'A', 4)}>{formatValue(point.id, 'A')}</span>
+    </p>
+  );
+}
+
+function useVerdict(part: DrawnPart) {
+  const point = useFetPoint(isFet(part) ? part.ref : '');
+  return point && isFet(part) && part.values.intent ? standingOf(point, part.values.intent).verdict : undefined;
+}

@@ -1,0 +1,41 @@
+import { wrap } from 'comlink';
+import type { OperatingPointRecord } from '#shared/analyses/operating-point-record';
+import type { CircuitFile } from '#shared/circuit/circuit-file';
+import type { SolverWorker } from './solver.worker';
+
+/** A solver on its own thread. It answers a circuit at a time; a rejected answer means that it is of no more use. */
+export type Solver = {
+  operatingPoint(circuit: CircuitFile): Promise<OperatingPointRecord>;
+  stop(): void;
+};
+
+/** Far beyond what the largest sheet takes: past this the worker hangs. In milliseconds. */
+const LONGEST_SOLVE = 60_000;
+
+export function startSolver(): Solver {
+  const worker = new Worker(new URL('./solver.worker.ts', import.meta.url), { type: 'module', name: 'solver' });
+  const remote = wrap<SolverWorker>(worker);
+  // A dead worker answers nothing at all, so each question also listens for its death.
+  const dead = new Promise<never>((_, reject) => {
+    worker.addEventListener('error', (event) => {
+      event.preventDefault();
+      reject(new Error(event.message || 'its program could not be loaded'));
+    });
+    worker.addEventListener('messageerror', () => reject(new Error('its answer could not be read')));
+  });
+  dead.catch(() => {});
+  return {
+    async operatingPoint(circuit) {
+      let timer: ReturnType<typeof setTimeout> | undefined;
+      const late = new Promise<never>((_, reject) => {
+        timer = setTimeout(() => reject(new Error('it took longer than a minute')), LONGEST_SOLVE);
+      });
+      try {
+        return await Promise.race([remote.operatingPoint(circuit), dead, late]);
+      } finally {
+        clearTimeout(timer);
+      }
+    },
+    stop: () => worker.terminate(),
+  };
+}
