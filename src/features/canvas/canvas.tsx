@@ -1,0 +1,264 @@
+import { type MouseEvent, type PointerEvent, useCallback, useEffect, useMemo, useRef, useState } from 'react';
+import { ReactFlowProvider } from 'reactflow';
+import { catalogueEntry } from '#shared/circuit/catalogue';
+import type { PartId, WireEnd, WireId } from '#shared/circuit/drawing';
+import { terminalKey } from '#shared/circuit/nets';
+import type { GridPoint } from '#shared/geometry/place';
+import './canvas.css';
+import { CanvasPartsProvider } from './canvas-context';
+import type { CanvasProps } from './canvas-props';
+import { asWireId, useFlowElements } from './flow-elements';
+import { HandMarks } from './hand-marks';
+import { type Desk, handleKey, handleKeyUp } from './keyboard';
+import { KeysDialog } from './keys-dialog';
+import { Marks } from './marks';
+import { NetMarks } from './net-marks';
+import { netSpots } from './net-spots';
+import { spokenPart, spokenTerminal } from './part-text';
+import { SheetFlow } from './sheet-flow';
+import { layOut, type SheetGeometry } from './sheet-geometry';
+import { SlipOverlay } from './slip-overlay';
+import { boxOnSheet } from './symbol-box';
+import { Tray } from './tray';
+import { useFlowChanges } from './use-flow-changes';
+import { useLatest } from './use-latest';
+import { useMoving } from './use-moving';
+import { usePlacing } from './use-placing';
+import { useView } from './use-view';
+import { useWiring } from './use-wiring';
+import { ViewportLayer } from './viewport-layer';
+import { wireGraph } from './wire-graph';
+
+const unknownRegion = () => undefined;
+
+/** The drawing with its tray. It shows what it is given and asks for changes through `commands` alone. */
+export function Canvas(props: CanvasProps) {
+  return (
+    <ReactFlowProvider>
+      <Board {...props} />
+    </ReactFlowProvider>
+  );
+}
+
+function Board(props: CanvasProps) {
+  const { drawing, nets, commands, selection, onSelect, announce, slip, slipPart, frame } = props;
+  const { Tag, PartProblem, NetVoltage, useRegion = unknownRegion } = props;
+  const [voltages, setVoltages] = useState(true);
+  const [keysShown, setKeysShown] = useState(false);
+  const [hovered, setHovered] = useState<string>();
+  const board = useRef<HTMLElement>(null);
+  const pointer = useRef<GridPoint>(undefined);
+  const view = useView();
+
+  const { elsewhere, hands: moving } = useMoving(drawing, commands, announce);
+  const before = useRef<SheetGeometry>(undefined);
+  const geometry = useMemo(() => {
+    before.current = layOut(drawing, elsewhere, before.current);
+    return before.current;
+  }, [drawing, elsewhere]);
+  const latestGeometry = useLatest(geometry);
+
+  const placed = useRef<PartId>(undefined);
+  const onPlaced = (part: PartId) => {
+    placed.current = part;
+    onSelect({ parts: new Set([part]), wires: new Set() });
+  };
+  const { placing, hands: placingHands } = usePlacing(commands, announce, onPlaced);
+  useEffect(() => {
+    const part = placed.current && geometry.parts.get(placed.current);
+    if (!part) return;
+    placed.current = undefined;
+    announce(`Placed ${spokenPart(part)} at ${part.place.x}, ${part.place.y}.`);
+  }, [geometry, announce]);
+
+  const sheet = { drawing, geometry, nets, commands, announce, toSheet: view.toSheet };
+  const { wiring, hands: wiringHands } = useWiring(sheet);
+
+  const parts = useMemo(
+    () => ({ Tag, PartProblem, useRegion, pressTerminal: wiringHands.press }),
+    [Tag, PartProblem, useRegion, wiringHands],
+  );
+  const graph = useMemo(() => wireGraph(drawing, geometry, nets), [drawing, geometry, nets]);
+  const { ground } = drawing.settings;
+  const spots = useMemo(
+    () => netSpots(graph, geometry, nets, ground, voltages),
+    [graph, geometry, nets, ground, voltages],
+  );
+  const { nodes, edges } = useFlowElements(drawing, geometry, nets, selection, slipPart);
+  const litLines = useMemo(() => {
+    const netOf = (id: WireId) => {
+      const wire = drawing.wires.find((candidate) => candidate.id === id);
+      return wire && nets.netOf.get(terminalKey(wire.from));
+    };
+    const net = hovered === undefined ? undefined : netOf(asWireId(hovered));
+    if (net === undefined) return [];
+    return [...geometry.routes].filter(([id]) => netOf(id) === net).map(([, line]) => line);
+  }, [hovered, drawing, nets, geometry]);
+
+  const focus = useCallback((selector: string) => {
+    board.current?.querySelector<HTMLElement>(selector)?.focus({ preventScroll: true });
+  }, []);
+  const focusDrawing = () => board.current?.focus({ preventScroll: true });
+  const reveal = (id: PartId) => {
+    const part = geometry.parts.get(id);
+    if (part) view.reveal(boxOnSheet(part.kind, part.place));
+  };
+  const middleOfSelected = (): GridPoint | undefined => {
+    const [id] = selection.parts;
+    const part = id === undefined ? undefined : geometry.parts.get(id);
+    return part && { x: part.place.x + 100, y: part.place.y };
+  };
+  const desk: Desk = {
+    geometry,
+    commands,
+    selection,
+    moving,
+    placing: placingHands,
+    wiring: wiringHands,
+    slipOpen: slipPart !== undefined,
+    wiresAt: ({ part, pin }: WireEnd) =>
+      new Set(
+        drawing.wires
+          .filter(({ from, to }) => [from, to].some((end) => end.part === part && end.pin === pin))
+          .map(({ id }) => id),
+      ),
+    select: onSelect,
+    placingStart: () => pointer.current ?? middleOfSelected() ?? view.middle(),
+    focusPart(id) {
+      reveal(id);
+      focus(`[data-part="${id}"]`);
+    },
+    focusTerminal({ part, pin }) {
+      reveal(part);
+      focus(`[data-nodeid="${part}"][data-handleid="${pin}"]`);
+    },
+    focusDrawing,
+    openSlip: (id) => {
+      const kind = geometry.parts.get(id)?.kind;
+      if (kind !== undefined && kind !== 'ground' && kind !== 'junction') props.onOpenSlip(id);
+    },
+    closeSlip() {
+      props.onCloseSlip();
+      if (slipPart !== undefined) focus(`[data-part="${slipPart}"]`);
+    },
+    showKeys: () => setKeysShown(true),
+    announce,
+  };
+  const latestDesk = useLatest(desk);
+  const changes = useFlowChanges(latestDesk);
+
+  // biome-ignore lint/correctness/useExhaustiveDependencies: only a new request frames again, not a part that moved
+  useEffect(() => {
+    const part = frame && geometry.parts.get(frame.part);
+    if (part) view.frame(boxOnSheet(part.kind, part.place));
+  }, [frame?.request]);
+
+  const fit = useCallback(() => view.fit(latestGeometry.current), [view, latestGeometry]);
+
+  const onPointerMove = (event: PointerEvent) => {
+    const at = view.toSheet({ x: event.clientX, y: event.clientY });
+    pointer.current = at;
+    props.onPointer?.(at);
+    placingHands.follow(at);
+    if (!wiring?.held) wiringHands.follow(at);
+  };
+  const onPointerLeave = () => {
+    pointer.current = undefined;
+    props.onPointer?.(undefined);
+  };
+  /** While something is in the hand, a click anywhere on the sheet is about that alone. */
+  const onClickCapture = (event: MouseEvent) => {
+    if (event.target instanceof Element && event.target.closest('[data-own-keys]')) return;
+    const at = view.toSheet({ x: event.clientX, y: event.clientY });
+    const ties = wiringHands.takesClick();
+    if (placingHands.now()) {
+      placingHands.follow(at);
+      placingHands.put();
+    } else if (wiringHands.now()) {
+      if (ties) {
+        wiringHands.follow(at);
+        wiringHands.tie();
+      }
+    } else return;
+    event.stopPropagation();
+  };
+
+  const slipOn = slipPart === undefined ? undefined : geometry.parts.get(slipPart);
+  return (
+    <div className="canvas">
+      <section
+        ref={board}
+        className="drawing"
+        // biome-ignore lint/a11y/noNoninteractiveTabindex: the drawing is one stop of the Tab key and has keys of its own
+        tabIndex={0}
+        role="application"
+        aria-label="Drawing"
+        data-can-edit={commands.canEdit || undefined}
+        data-wiring={wiring !== undefined || undefined}
+        data-placing={placing !== undefined || undefined}
+        onKeyDown={(event) => handleKey(event, desk)}
+        onKeyUp={(event) => handleKeyUp(event, desk)}
+        onPointerMove={onPointerMove}
+        onPointerLeave={onPointerLeave}
+        onClickCapture={onClickCapture}
+      >
+        <CanvasPartsProvider value={parts}>
+          <SheetFlow
+            nodes={nodes}
+            edges={edges}
+            draggable={commands.canEdit && placing === undefined && wiring === undefined}
+            onReady={fit}
+            onWireHover={setHovered}
+            onDragStart={moving.begin}
+            onDragStop={moving.drop}
+            {...changes}
+          />
+        </CanvasPartsProvider>
+        <NetMarks dots={graph.dots} spots={spots} lit={litLines} voltages={voltages} NetVoltage={NetVoltage} />
+        <ViewportLayer>
+          <Marks geometry={geometry} selected={selection.parts} lit={props.lit} others={props.others} />
+          <HandMarks placing={placing} wiring={wiring} geometry={geometry} />
+        </ViewportLayer>
+        {slip !== undefined && slipOn && <SlipOverlay part={slipOn}>{slip}</SlipOverlay>}
+      </section>
+      <Tray
+        canEdit={commands.canEdit}
+        inHand={placing?.kind}
+        hint={hintFor(placing, wiring?.from, geometry)}
+        voltages={voltages}
+        onVoltages={setVoltages}
+        onFit={fit}
+        onKeys={() => setKeysShown(true)}
+        onTake={(kind) => {
+          if (placing?.kind === kind) placingHands.end();
+          else placingHands.begin(kind, view.middle());
+          focusDrawing();
+        }}
+        onDrag={(kind, at) => {
+          if (placingHands.now()?.kind !== kind) placingHands.begin(kind, view.toSheet(at));
+          placingHands.follow(view.toSheet(at));
+        }}
+        onDragEnd={({ x, y }) => {
+          if (board.current?.contains(document.elementFromPoint(x, y))) placingHands.put();
+          placingHands.end();
+          focusDrawing();
+        }}
+      />
+      <KeysDialog open={keysShown} onOpenChange={setKeysShown} />
+    </div>
+  );
+}
+
+function hintFor(
+  placing: { kind: Parameters<typeof catalogueEntry>[0]; place: GridPoint } | undefined,
+  wireFrom: WireEnd | undefined,
+  geometry: SheetGeometry,
+): string {
+  if (placing) {
+    const { label } = catalogueEntry(placing.kind);
+    return `${label} at ${placing.place.x}, ${placing.place.y} · click or Enter places · Escape ends`;
+  }
+  const part = wireFrom && geometry.parts.get(wireFrom.part);
+  if (!part || !wireFrom) return '';
+  return `wire from ${spokenTerminal(part, wireFrom.pin)} · click a terminal or a wire · Escape drops it`;
+}

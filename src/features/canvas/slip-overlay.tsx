@@ -1,0 +1,65 @@
+import { type ReactNode, type RefObject, useLayoutEffect, useRef, useState } from 'react';
+import { useStore, useViewport } from 'reactflow';
+import { type DrawnPart, isFet } from '#shared/circuit/drawing';
+import { outset } from './brackets';
+import { type Box, boxOnSheet, labelAnchor, tagAnchor } from './symbol-box';
+
+type Size = { readonly width: number; readonly height: number };
+
+/** Free space kept about the slip, in px of the window. */
+const GAP = 10;
+
+/** The open slip, at its own size beside its part whatever the zoom, and wholly within the drawing where it fits. */
+export function SlipOverlay({ part, children }: { part: DrawnPart; children: ReactNode }) {
+  const { x, y, zoom } = useViewport();
+  const width = useStore((state) => state.width);
+  const height = useStore((state) => state.height);
+  const ref = useRef<HTMLDivElement>(null);
+  const size = useSize(ref);
+  const box = outset(boxOnSheet(part.kind, part.place));
+  const anchor = (isFet(part) ? tagAnchor(part) : labelAnchor(part))?.at ?? part.place;
+  const onScreen = {
+    left: box.left * zoom + x,
+    top: box.top * zoom + y,
+    right: box.right * zoom + x,
+    bottom: box.bottom * zoom + y,
+  };
+  const toTheRight = anchor.x * 2 >= box.left + box.right;
+  const { left, top } = besidePart(onScreen, toTheRight, size, { width, height });
+  return (
+    // React Flow and the drawing's keys leave alone what happens in here.
+    <div ref={ref} className="slip-overlay nodrag nopan nowheel nokey" data-own-keys style={{ left, top }}>
+      {children}
+    </div>
+  );
+}
+
+/** Beside the part on the side asked for, else the other, else below or above it; moved into the window at last. */
+function besidePart(part: Box, toTheRight: boolean, slip: Size, window: Size): { left: number; top: number } {
+  const right = part.right + GAP;
+  const left = part.left - GAP - slip.width;
+  const clampX = (at: number) => Math.max(GAP, Math.min(at, window.width - slip.width - GAP));
+  const clampY = (at: number) => Math.max(GAP, Math.min(at, window.height - slip.height - GAP));
+  const fitsX = (at: number) => at >= GAP && at + slip.width + GAP <= window.width;
+  for (const at of toTheRight ? [right, left] : [left, right]) {
+    if (fitsX(at)) return { left: at, top: clampY(part.top) };
+  }
+  const below = part.bottom + GAP;
+  const above = part.top - GAP - slip.height;
+  if (below + slip.height + GAP > window.height && above >= GAP) return { left: clampX(part.left), top: above };
+  return { left: clampX(part.left), top: clampY(below) };
+}
+
+function useSize(ref: RefObject<HTMLElement | null>): Size {
+  const [size, setSize] = useState<Size>({ width: 0, height: 0 });
+  useLayoutEffect(() => {
+    const element = ref.current;
+    if (!element) return;
+    const measure = () => setSize({ width: element.offsetWidth, height: element.offsetHeight });
+    measure();
+    const observer = new ResizeObserver(measure);
+    observer.observe(element);
+    return () => observer.disconnect();
+  }, [ref]);
+  return size;
+}

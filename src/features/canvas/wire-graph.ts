@@ -1,0 +1,122 @@
+import type { Drawing } from '#shared/circuit/drawing';
+import { type DrawnNets, terminalKey } from '#shared/circuit/nets';
+import { GRID, type GridPoint } from '#shared/geometry/place';
+import type { SheetGeometry } from './sheet-geometry';
+
+/** A straight stretch of a net's wires with no corner, dot or crossing within. */
+export type Run = { readonly from: GridPoint; readonly to: GridPoint; readonly upright: boolean };
+
+export type WireGraph = {
+  /** Where three or more ends meet, and junctions that nothing holds any more. */
+  readonly dots: readonly GridPoint[];
+  readonly runsOf: ReadonlyMap<string, readonly Run[]>;
+};
+
+const RIGHT = 1;
+const DOWN = 2;
+const LEFT = 4;
+const UP = 8;
+
+/** Directions into which a net leads from a grid point: along its wires, and along its terminals' leads too. */
+type Directions = { wires: number; all: number };
+
+/**
+ * What the wires of each net look like once they lie on the grid together: where they part they make a dot, wherever
+ * the ends of the single wires are.
+ */
+export function wireGraph(drawing: Drawing, geometry: SheetGeometry, { netOf }: DrawnNets): WireGraph {
+  const nets = new Map<string, Map<string, Directions>>();
+  const at = (net: string, point: GridPoint): Directions => {
+    let points = nets.get(net);
+    if (!points) {
+      points = new Map();
+      nets.set(net, points);
+    }
+    const key = keyOf(point);
+    let directions = points.get(key);
+    if (!directions) {
+      directions = { wires: 0, all: 0 };
+      points.set(key, directions);
+    }
+    return directions;
+  };
+  for (const wire of drawing.wires) {
+    const net = netOf.get(terminalKey(wire.from));
+    const line = geometry.routes.get(wire.id);
+    if (net === undefined || !line) continue;
+    for (let i = 1; i < line.length; i++) {
+      for (const [point, ways] of stretch(line[i - 1] as GridPoint, line[i] as GridPoint)) {
+        const directions = at(net, point);
+        directions.wires |= ways;
+        directions.all |= ways;
+      }
+    }
+  }
+  for (const [key, { at: point, leaves }] of geometry.terminals) {
+    const net = netOf.get(key);
+    if (net !== undefined) at(net, point).all |= wayOf({ x: -leaves.x, y: -leaves.y });
+  }
+
+  const crossed = new Map<string, number>();
+  for (const points of nets.values()) for (const key of points.keys()) crossed.set(key, (crossed.get(key) ?? 0) + 1);
+
+  const dots = new Map<string, GridPoint>();
+  const runsOf = new Map<string, Run[]>();
+  for (const [net, points] of nets) {
+    for (const [key, { all }] of points) if (count(all) >= 3) dots.set(key, pointOf(key));
+    runsOf.set(net, [...runs(points, crossed, RIGHT), ...runs(points, crossed, DOWN)]);
+  }
+  for (const { part, at: point, end } of geometry.terminals.values()) {
+    if (part.kind !== 'junction') continue;
+    const directions = nets.get(netOf.get(terminalKey(end)) ?? '')?.get(keyOf(point));
+    if (!directions || count(directions.all) < 2) dots.set(keyOf(point), point);
+  }
+  return { dots: [...dots.values()], runsOf };
+}
+
+function runs(points: ReadonlyMap<string, Directions>, crossed: ReadonlyMap<string, number>, way: number): Run[] {
+  const upright = way === DOWN;
+  const through = upright ? UP | DOWN : LEFT | RIGHT;
+  const plain = (key: string) => points.get(key)?.all === through && crossed.get(key) === 1;
+  const found: Run[] = [];
+  for (const [key, { wires }] of points) {
+    if ((wires & way) === 0 || plain(key)) continue;
+    const from = pointOf(key);
+    let to = from;
+    do to = upright ? { x: to.x, y: to.y + GRID } : { x: to.x + GRID, y: to.y };
+    while (plain(keyOf(to)));
+    found.push({ from, to, upright });
+  }
+  return found;
+}
+
+/** The grid points of a straight stretch, each with the ways along the stretch that lead from it. */
+function* stretch(a: GridPoint, b: GridPoint): Generator<[point: GridPoint, ways: number]> {
+  const step = { x: Math.sign(b.x - a.x), y: Math.sign(b.y - a.y) };
+  const steps = Math.max(Math.abs(b.x - a.x), Math.abs(b.y - a.y)) / GRID;
+  for (let i = 0; i <= steps; i++) {
+    const ahead = i < steps ? wayOf(step) : 0;
+    const back = i > 0 ? wayOf({ x: -step.x, y: -step.y }) : 0;
+    yield [{ x: a.x + step.x * i * GRID, y: a.y + step.y * i * GRID }, ahead | back];
+  }
+}
+
+function wayOf({ x, y }: GridPoint): number {
+  if (x > 0) return RIGHT;
+  if (x < 0) return LEFT;
+  if (y > 0) return DOWN;
+  return y < 0 ? UP : 0;
+}
+
+function count(directions: number): number {
+  return [RIGHT, DOWN, LEFT, UP].filter((way) => (directions & way) !== 0).length;
+}
+
+function keyOf({ x, y }: GridPoint): string {
+  return `${x} ${y}`;
+}
+
+function pointOf(key: string): GridPoint {
+  const [x, y] = key.split(' ').map(Number);
+  return { x: x ?? 0, y: y ?? 0 };
+}
