@@ -4,10 +4,8 @@ import { newId } from '../auth/tokens';
 import type { Config } from '../config';
 import type { Db } from '../db/connect';
 import { anyPerson, findPersonByEmail, insertPerson, setPasswordHash } from '../db/queries/people';
-import { insertUpdate } from '../db/queries/sheet-log';
-import { insertSheet } from '../db/queries/sheets';
 import { insertMembership, insertTeam } from '../db/queries/teams';
-import { firstState } from '../sync/first-state';
+import { storeNewSheet } from '../services/store-new-sheet';
 import { demoPassword } from './password';
 import { DEMO_PEOPLE, DEMO_SHEETS, DEMO_TEAM } from './people';
 
@@ -63,8 +61,8 @@ function seed(db: Db, passwordHash: string, now: number): void {
       const id = newId();
       // The first of the list is the last changed.
       const at = now - index * 3_600_000;
-      insertSheet(tx, { id, teamId, name, createdBy, createdAt: at, changedAt: at });
-      insertUpdate(tx, id, firstState(drawing));
+      const times = { createdAt: at, changedAt: at };
+      storeNewSheet(tx, { id, teamId, name, state: 'draft', archived: false, createdBy, ...times }, drawing);
     });
   });
 }

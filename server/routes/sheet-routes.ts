@@ -27,7 +27,7 @@ export function sheetRoutes(ctx: Context): Route[] {
       method: 'post',
       path: '/api/teams/:teamId/sheets',
       access: 'signed-in',
-      perMinute: 120,
+      perMinute: 240,
       handle: ({ param, body, signedIn: { person } }) => ({
         status: 201,
         body: createSheet(ctx, param('teamId'), parseBody(createSheetBody, body), person.id),

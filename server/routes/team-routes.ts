@@ -74,7 +74,7 @@ export function teamRoutes(ctx: Context): Route[] {
       method: 'post',
       path: '/api/teams/:teamId/invitations',
       access: 'signed-in',
-      perMinute: 60,
+      perMinute: 120,
       handle: ({ param, body, signedIn: { person } }) => ({
         status: 201,
         body: invite(ctx, param('teamId'), parseBody(createInvitationBody, body), person),

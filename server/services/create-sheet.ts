@@ -7,21 +7,15 @@ import type { ProblemCode } from '#shared/circuit/problem';
 import { readCircuit } from '#shared/circuit/read-circuit';
 import { BLANK_DRAWING, STARTERS } from '#shared/starters/starters';
 import { newId } from '../auth/tokens';
-import { insertUpdate } from '../db/queries/sheet-log';
-import { insertSheet } from '../db/queries/sheets';
-import { firstState } from '../sync/first-state';
 import type { Context } from './context';
 import { sheetAnswerOf } from './sheet-answer';
+import { storeNewSheet } from './store-new-sheet';
 import { requireTeam } from './team-access';
 import { tellTeam } from './tell-team';
 
-/**
- * Makes a sheet: blank, from a starter, or from a circuit file. Its first state is stored with it, once; the live
- * document is never filled a second time.
- */
+/** Makes a sheet: blank, from a starter, or from a circuit file. */
 export function createSheet(ctx: Context, teamId: string, body: CreateSheetBody, askerId: string): SheetAnswer {
   const team = requireTeam(ctx.db, teamId, askerId, 'edit-sheet');
-  const state = firstState(drawingFor(body));
   const now = ctx.now();
   const sheet = {
     id: newId(),
@@ -33,10 +27,7 @@ export function createSheet(ctx: Context, teamId: string, body: CreateSheetBody,
     createdAt: now,
     changedAt: now,
   };
-  ctx.db.transaction((tx) => {
-    insertSheet(tx, sheet);
-    insertUpdate(tx, sheet.id, state);
-  });
+  storeNewSheet(ctx.db, sheet, drawingFor(body));
   tellTeam(ctx, teamId, { kind: 'sheet', teamId, sheetId: sheet.id });
   return { sheet: sheetAnswerOf(sheet), team };
 }

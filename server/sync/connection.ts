@@ -1,6 +1,7 @@
 import type { RawData, WebSocket } from 'ws';
+import type { Member } from './member';
 import { readMessage } from './messages';
-import type { Member, Room } from './room';
+import type { Room } from './room';
 import { CLOSE, type CloseCode } from './socket-codes';
 
 /** Messages a second in the long run, and in one burst. */

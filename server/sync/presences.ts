@@ -1,6 +1,6 @@
 import { type Awareness, applyAwarenessUpdate, removeAwarenessStates } from 'y-protocols/awareness';
+import type { Member } from './member';
 import { type Presence, presenceUpdate, tellPresence } from './messages';
-import type { Member } from './room';
 
 /** The largest presence taken, in characters of JSON. */
 const LARGEST = 4096;

@@ -1,21 +1,12 @@
 import { Awareness } from 'y-protocols/awareness';
 import * as Y from 'yjs';
-import { can, type Role } from '#shared/access/roles';
-import type { Person } from '#shared/api/accounts';
+import { can } from '#shared/access/roles';
 import { changesNothing } from './changes-nothing';
 import type { SheetLog } from './log';
+import type { Member } from './member';
 import { askForMissing, type ClientMessage, tellMissing, tellPresence, tellRefused, tellUpdate } from './messages';
 import { Presences } from './presences';
 import type { CloseCode } from './socket-codes';
-
-/** One open sheet of one person, as its room knows it. */
-export interface Member {
-  readonly person: Person;
-  readonly sessionId: string;
-  role: Role;
-  send(message: Uint8Array): void;
-  close(code: CloseCode, reason: string): void;
-}
 
 export interface RoomTroubles {
   /** Changes could not be stored: the document in memory is ahead of the log and must be let go. */

@@ -2,7 +2,8 @@ import type { Role } from '#shared/access/roles';
 import type { Drawing } from '#shared/circuit/drawing';
 import { readDrawing } from '#shared/doc/read-drawing';
 import type { OpenLog } from './log';
-import { type Member, Room } from './room';
+import type { Member } from './member';
+import { Room } from './room';
 import { CLOSE, type CloseCode } from './socket-codes';
 
 /** Whether a session may have a sheet open, and as what. */

@@ -2,8 +2,8 @@ import type { IncomingMessage, Server } from 'node:http';
 import type { Duplex } from 'node:stream';
 import type { Logger } from 'pino';
 import { type WebSocket, WebSocketServer } from 'ws';
-import type { SignedIn } from '../auth/sessions';
 import { closeSocket, connect } from './connection';
+import type { Opener } from './member';
 import type { Admission, Admit, Rooms } from './rooms';
 import { CLOSE } from './socket-codes';
 
@@ -14,7 +14,7 @@ const PATH = /^\/sync\/([\w-]{1,64})$/;
 export interface UpgradeDeps {
   readonly rooms: Rooms;
   readonly admit: Admit;
-  readonly identify: (cookieHeader: string | undefined) => Promise<SignedIn | null>;
+  readonly identify: (cookieHeader: string | undefined) => Promise<Opener | null>;
   /** Notes that the session is in use. */
   readonly touch: (sessionId: string) => void;
   readonly ownOrigins: () => ReadonlySet<string>;
@@ -56,7 +56,7 @@ function admitSocket(
   socket: WebSocket,
   request: IncomingMessage,
   sheetId: string,
-  signedIn: SignedIn | null,
+  signedIn: Opener | null,
   deps: UpgradeDeps,
 ): void {
   const { log, rooms } = deps;
@@ -95,7 +95,7 @@ const NOT_SIGNED_IN = { admitted: false, code: CLOSE.notSignedIn, reason: 'not s
 function admissionOf(
   origin: string | undefined,
   sheetId: string,
-  signedIn: SignedIn | null,
+  signedIn: Opener | null,
   { admit, ownOrigins }: UpgradeDeps,
 ): Admission {
   if (!ownOrigins().has(origin ?? '')) {

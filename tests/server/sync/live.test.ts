@@ -1,0 +1,188 @@
+import { existsSync } from 'node:fs';
+import { describe, expect, onTestFinished, test, vi } from 'vitest';
+import * as Y from 'yjs';
+import { openDatabase } from '../../../server/db/connect';
+import { loadUpdates } from '../../../server/db/queries/sheet-log';
+import type { OpenLog } from '../../../server/sync/log';
+import { contentOf, LiveSheet } from '../support/live-sheet';
+import { newDatabaseFile, startTestServer } from '../support/start-test-server';
+import { assembleTeam, Visitor } from '../support/visitor';
+
+const server = await startTestServer();
+const team = await assembleTeam(server);
+
+/** What the database holds of a sheet, read from its rows as a restarted server would. */
+function stored(sheetId: string, db = server.context.db): Y.Doc {
+  const doc = new Y.Doc();
+  for (const update of loadUpdates(db, sheetId)) Y.applyUpdate(doc, update);
+  onTestFinished(() => doc.destroy());
+  return doc;
+}
+
+const open = (visitor: Visitor, sheetId: string) => new LiveSheet(server, visitor, sheetId).synced();
+
+describe('a live sheet', () => {
+  test('shows two people each other’s changes, and both end with the same', async () => {
+    const sheetId = await team.owner.createSheet(team.teamId, { starter: 'mirror' });
+    const ines = await open(team.owner, sheetId);
+    const samir = await open(team.designer, sheetId);
+    ines.notes.set('temperature', 40);
+    samir.notes.set('ground', 'gnd');
+    await vi.waitFor(() => {
+      expect(samir.notes.get('temperature')).toBe(40);
+      expect(ines.notes.get('ground')).toBe('gnd');
+    });
+    expect(Y.encodeStateVector(ines.doc)).toEqual(Y.encodeStateVector(samir.doc));
+    expect(contentOf(ines.doc)).toEqual(contentOf(samir.doc));
+  });
+
+  test('sends nobody a change that is not stored yet', async () => {
+    const sheetId = await team.owner.createSheet(team.teamId);
+    const ines = await open(team.owner, sheetId);
+    const samir = await open(team.designer, sheetId);
+    let seenUnstored = 0;
+    let seen = 0;
+    samir.doc.on('update', () => {
+      seen += 1;
+      if (Number(stored(sheetId).getMap('sheet').get('count')) < Number(samir.notes.get('count'))) seenUnstored += 1;
+    });
+    for (let count = 1; count <= 30; count += 1) ines.notes.set('count', count);
+    await vi.waitFor(() => expect(samir.notes.get('count')).toBe(30));
+    expect(seen).toBeGreaterThan(0);
+    expect(seenUnstored).toBe(0);
+  });
+
+  test('tells a newcomer nothing that is not stored yet', async () => {
+    const sheetId = await team.owner.createSheet(team.teamId);
+    const ines = await open(team.owner, sheetId);
+    for (let i = 0; i < 20; i += 1) {
+      ines.notes.set('count', i);
+      const newcomer = await open(team.designer, sheetId);
+      expect(stored(sheetId).getMap('sheet').get('count') ?? -1).toBeGreaterThanOrEqual(
+        Number(newcomer.notes.get('count') ?? -1),
+      );
+      newcomer.leave();
+    }
+  });
+
+  test('is all there after the server was restarted', async () => {
+    const file = newDatabaseFile();
+    const before = await startTestServer({ file });
+    const visitor = await new Visitor(before).signUp('Ines Rautio');
+    const sheetId = await visitor.createSheet(await visitor.teamId(), { starter: 'mirror' });
+    const live = await new LiveSheet(before, visitor, sheetId).synced();
+    const other = await new LiveSheet(before, visitor, sheetId).synced();
+    live.notes.set('temperature', 55);
+    await vi.waitFor(() => expect(other.notes.get('temperature')).toBe(55));
+    const drawn = contentOf(live.doc);
+    const point = (await visitor.get(`/api/sheets/${sheetId}/operating-point`)).body;
+    await before.stop();
+    await vi.waitFor(() => expect(live.closes).toContain(1001));
+
+    const after = await startTestServer({ file });
+    const again = new Visitor(after);
+    again.cookie = visitor.cookie;
+    expect(contentOf((await new LiveSheet(after, again, sheetId).synced()).doc)).toEqual(drawn);
+    expect((await again.get(`/api/sheets/${sheetId}/operating-point`)).body).toEqual(point);
+  });
+
+  test('is not filled a second time by a client that comes back', async () => {
+    const sheetId = await team.owner.createSheet(team.teamId, { starter: 'mirror' });
+    const ines = await open(team.owner, sheetId);
+    const drawn = contentOf(ines.doc);
+    for (let i = 0; i < 3; i += 1) {
+      ines.provider.disconnect();
+      ines.provider.connect();
+      await ines.synced();
+    }
+    ines.leave();
+    expect(contentOf((await open(team.designer, sheetId)).doc)).toEqual(drawn);
+  });
+
+  test('takes up less once the last has left, and holds the same', async () => {
+    const sheetId = await team.owner.createSheet(team.teamId);
+    const ines = await open(team.owner, sheetId);
+    const samir = await open(team.designer, sheetId);
+    for (let i = 0; i < 40; i += 1) {
+      ines.notes.set('count', i);
+      await vi.waitFor(() => expect(samir.notes.get('count')).toBe(i));
+    }
+    expect(loadUpdates(server.context.db, sheetId).length).toBeGreaterThan(40);
+    ines.leave();
+    samir.leave();
+    await vi.waitFor(() => expect(loadUpdates(server.context.db, sheetId)).toHaveLength(1));
+    expect(stored(sheetId).getMap('sheet').get('count')).toBe(39);
+  });
+
+  test('is shortened while it is open too, without a change being lost', async () => {
+    const sheetId = await team.owner.createSheet(team.teamId);
+    const ines = await open(team.owner, sheetId);
+    const samir = await open(team.designer, sheetId);
+    for (let i = 1; i <= 520; i += 1) {
+      ines.notes.set(`note ${i % 7}`, i);
+      // Within the rate that one socket is allowed.
+      if (i % 100 === 0) await vi.waitFor(() => expect(samir.notes.get(`note ${i % 7}`)).toBe(i));
+    }
+    await vi.waitFor(() => expect(samir.notes.get(`note ${520 % 7}`)).toBe(520));
+    expect(loadUpdates(server.context.db, sheetId).length).toBeLessThan(500);
+    expect(stored(sheetId).getMap('sheet').toJSON()).toEqual(ines.notes.toJSON());
+  });
+});
+
+describe('when the disk fails', () => {
+  test('nobody sees the change, everybody is told, and it arrives once the disk is back', async () => {
+    let failing = false;
+    const openLog =
+      (real: OpenLog): OpenLog =>
+      (sheetId) => {
+        const log = real(sheetId);
+        return {
+          ...log,
+          append(updates) {
+            if (failing) throw new Error('disk full');
+            log.append(updates);
+          },
+        };
+      };
+    const fragile = await startTestServer({ openLog });
+    const { owner, designer, teamId } = await assembleTeam(fragile);
+    const sheetId = await owner.createSheet(teamId);
+    const otherSheetId = await owner.createSheet(teamId);
+    const ines = await new LiveSheet(fragile, owner, sheetId).synced();
+    const samir = await new LiveSheet(fragile, designer, sheetId).synced();
+    const elsewhere = await new LiveSheet(fragile, designer, otherSheetId).synced();
+    const seen: unknown[] = [];
+    samir.notes.observe(() => seen.push(samir.notes.get('count')));
+
+    failing = true;
+    ines.notes.set('count', 1);
+    await vi.waitFor(() => {
+      expect(ines.closes).toContain(1013);
+      expect(samir.closes).toContain(1013);
+    });
+    expect(seen).toEqual([]);
+    expect(stored(sheetId, fragile.context.db).getMap('sheet').has('count')).toBe(false);
+    expect(elsewhere.closes).toEqual([]);
+
+    failing = false;
+    await vi.waitFor(() => expect(samir.notes.get('count')).toBe(1), { timeout: 5000 });
+    expect(stored(sheetId, fragile.context.db).getMap('sheet').get('count')).toBe(1);
+  });
+});
+
+test('a server that stops has stored what it had heard, in a file that needs no mending', async () => {
+  const file = newDatabaseFile();
+  const stopping = await startTestServer({ file });
+  const visitor = await new Visitor(stopping).signUp('Ines Rautio');
+  const sheetId = await visitor.createSheet(await visitor.teamId());
+  const live = await new LiveSheet(stopping, visitor, sheetId).synced();
+  const other = await new LiveSheet(stopping, visitor, sheetId).synced();
+  live.notes.set('count', 7);
+  await vi.waitFor(() => expect(other.notes.get('count')).toBe(7));
+  await stopping.stop();
+  expect(existsSync(`${file}-wal`)).toBe(false);
+  const { db, sqlite } = openDatabase(file);
+  onTestFinished(() => void sqlite.close());
+  expect(sqlite.pragma('integrity_check', { simple: true })).toBe('ok');
+  expect(stored(sheetId, db).getMap('sheet').get('count')).toBe(7);
+});
