@@ -1,6 +1,7 @@
 import { type FetPart, isFet } from '../circuit/circuit-file';
 import { type Problem, problem } from '../circuit/problem';
 import type { Circuit } from '../circuit/read-circuit';
+import { byReference } from '../circuit/reference-order';
 import { thermalVoltage } from '../device/thermal-voltage';
 import { formatValue } from '../units/format-value';
 import type { FetPoint, Solution } from './operating-point-record';
@@ -16,7 +17,7 @@ export function remarkOnFets(circuit: Circuit, solution: Solution): Problem[] {
   const weak = WEAK * thermalVoltage(circuit.temperature);
   return circuit.parts
     .filter(isFet)
-    .toSorted((a, b) => (a.ref < b.ref ? -1 : 1))
+    .toSorted((a, b) => byReference(a.ref, b.ref))
     .flatMap((part) => {
       const point = solution.fets[part.ref];
       return point ? [...remarkOnIntent(part, point), ...remarkOnModel(part, point, weak)] : [];

@@ -1,4 +1,5 @@
 import { emptyRecord } from '../circuit/record-by-name';
+import { byReference } from '../circuit/reference-order';
 import { emptyChannel, evaluateChannel } from '../device/channel';
 import type { Equations } from '../solver/equations';
 import type { Network, NetworkFet } from '../solver/network';
@@ -55,7 +56,14 @@ export function describeSolution(
 
   let residual = 0;
   for (const [net, sum] of leaving.entries()) if (net !== network.ground) residual = Math.max(residual, Math.abs(sum));
-  return { solution: { nets, fets, sources, resistors, surelyUnstable }, residual };
+  const solution = {
+    nets,
+    fets: byRef(fets),
+    sources: byRef(sources),
+    resistors: byRef(resistors),
+    surelyUnstable,
+  };
+  return { solution, residual };
 }
 
 /** A device's figures, signed as measured. Within the edge's tolerance it is on the side that the contract gives the edge to. */
@@ -98,6 +106,13 @@ function describeBranches(network: Network, leaving: Float64Array, sources: Reco
     const current = childIsPlus ? drawn : -drawn;
     sources[ref] = { voltage: tidy(voltage), current: tidy(current), power: tidy(voltage * current) };
   }
+}
+
+/** The same entries in the order of a parts list. */
+function byRef<Value>(entries: Readonly<Record<string, Value>>): Record<string, Value> {
+  const ordered = emptyRecord<Value>();
+  for (const [ref, value] of Object.entries(entries).sort(([a], [b]) => byReference(a, b))) ordered[ref] = value;
+  return ordered;
 }
 
 /** A figure fit to print: never −0. */

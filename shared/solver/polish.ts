@@ -5,7 +5,7 @@ import { findUndrivenPieces, restUndrivenPieces, type UndrivenPiece } from './un
 
 /** S, the leakage that points are looked for with. */
 export const SEARCH_LEAKAGE = 1e-12;
-/** Smaller leakages, tried in turn, tell a device that carries picoamperes from one that only leaks. */
+/** S, smaller leakages, each a hundredth of the one before: what falls with them is leakage and nothing else. */
 const FINER_LEAKAGES = [1e-14, 1e-16];
 const MOST_ITERATIONS = 80;
 const MOST_ROUNDS = 6;
@@ -31,17 +31,17 @@ export type Polished =
 export function polish(equations: Equations, found: Float64Array): Polished {
   const x = found.slice();
   let iterations = 0;
-  let leakage = SEARCH_LEAKAGE;
+  const coarser = x.slice();
   for (const finer of FINER_LEAKAGES) {
     const trial = x.slice();
     const result = newton(equations, trial, { leakage: finer, supply: 1 }, MOST_ITERATIONS);
     iterations += result.iterations;
     if (result.status !== 'converged') break;
+    coarser.set(x);
     x.set(trial);
-    leakage = finer;
   }
 
-  const undriven = findUndrivenPieces(equations, x, leakage);
+  const undriven = findUndrivenPieces(equations, coarser, x);
   for (const piece of undriven) {
     if (piece.forcedThroughput === 0) continue;
     if (Math.abs(piece.forced) > BALANCE * piece.forcedThroughput) return { kind: 'none', iterations };

@@ -4,6 +4,10 @@ import type { NetworkFet } from './network';
 
 /** Overdrives within this many volts of zero are at the edge: nothing that is computed from a solution is finer. */
 export const EDGE = 1e-9;
+/** The share of its capacity that a device keeps at least, if it conducts, when the leakage falls a hundredfold. */
+const FALLING = 0.3;
+/** V, the change of an overdrive that is rounding. */
+const ROUNDING = 1e-12;
 const MOST_SWEEPS = 60;
 const MOST_HALVINGS = 200;
 const MOST_DOUBLINGS = 50;
@@ -17,14 +21,16 @@ export interface UndrivenPiece {
 }
 
 /**
- * Pieces that nothing which conducts joins to ground, at a solution found with `leakage` (S on every net). A FET is
- * taken to be off when all it could carry at its overdrive is what the leaks of the whole circuit may draw through it.
+ * Pieces that nothing which conducts joins to ground. `coarse` and `fine` solve the circuit with a larger and a much
+ * smaller leakage: a FET is off when what it could carry at its overdrive falls with the leakage, since then it only
+ * carries what the leaks draw through it.
  */
-export function findUndrivenPieces(equations: Equations, x: Float64Array, leakage: number): UndrivenPiece[] {
+export function findUndrivenPieces(equations: Equations, coarse: Float64Array, fine: Float64Array): UndrivenPiece[] {
   const { network } = equations;
-  equations.spreadVoltages(x);
+  equations.spreadVoltages(coarse);
+  const before = network.fets.map((fet) => Math.max(0, overdrive(fet, equations.netVoltages)) ** 2);
+  equations.spreadVoltages(fine);
   const v = equations.netVoltages;
-  const budget = 4 * leakage * v.reduce((sum, voltage) => sum + Math.abs(voltage), 0);
   const ground = equations.size;
   const parent = Int32Array.from({ length: ground + 1 }, (_, index) => index);
   const find = (group: number): number => {
@@ -41,9 +47,9 @@ export function findUndrivenPieces(equations: Equations, x: Float64Array, leakag
     if (low !== undefined && high !== undefined) parent[low] = high;
   };
   for (const { a, b } of network.resistors) join(a, b);
-  for (const fet of network.fets) {
+  for (const [index, fet] of network.fets.entries()) {
     const vov = overdrive(fet, v);
-    if (vov > EDGE && (fet.model.kn / 2) * vov * vov > budget) join(fet.drain, fet.source);
+    if (vov > EDGE && vov * vov > FALLING * (before[index] ?? 0)) join(fet.drain, fet.source);
   }
 
   const pieces = new Map<number, number[]>();
@@ -92,11 +98,13 @@ function nearestToZero(equations: Equations, x: Float64Array, groups: readonly n
   const inside = new Set(groups);
   const isInside = (net: number): boolean => inside.has(network.groupOf[net] ?? -1);
   const at = (voltage: number): Float64Array => start.map((v, net) => (isInside(net) ? v + voltage - from : v));
-  const touching = network.fets.filter(
-    (fet) => isInside(fet.drain) !== isInside(fet.source) && overdrive(fet, start) <= Math.max(EDGE, Math.abs(from)),
-  );
   const atZero = at(0);
-  const restricting = touching.filter((fet) => overdrive(fet, atZero) > Math.max(0, overdrive(fet, start) - EDGE));
+  // Devices that going to 0 would turn on; others stand as they are, and get their own turn if they hold another piece.
+  const restricting = network.fets.filter(
+    (fet) =>
+      isInside(fet.drain) !== isInside(fet.source) &&
+      overdrive(fet, atZero) > Math.max(0, overdrive(fet, start) + ROUNDING),
+  );
   const isOff = (voltage: number): boolean => {
     const v = at(voltage);
     return restricting.every((fet) => overdrive(fet, v) <= 0);
