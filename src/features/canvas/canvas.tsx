@@ -1,7 +1,7 @@
 import { type MouseEvent, type PointerEvent, useCallback, useEffect, useMemo, useRef, useState } from 'react';
-import { ReactFlowProvider } from 'reactflow';
+import { ReactFlowProvider, useStoreApi } from 'reactflow';
 import { catalogueEntry } from '#shared/circuit/catalogue';
-import type { PartId, WireEnd, WireId } from '#shared/circuit/drawing';
+import type { DrawnPart, PartId, WireEnd, WireId } from '#shared/circuit/drawing';
 import { terminalKey } from '#shared/circuit/nets';
 import type { GridPoint } from '#shared/geometry/place';
 import './canvas.css';
@@ -49,6 +49,7 @@ function Board(props: CanvasProps) {
   const board = useRef<HTMLElement>(null);
   const pointer = useRef<GridPoint>(undefined);
   const view = useView();
+  useQuietStrictMode();
 
   const { elsewhere, hands: moving } = useMoving(drawing, commands, announce);
   const before = useRef<SheetGeometry>(undefined);
@@ -84,7 +85,13 @@ function Board(props: CanvasProps) {
     () => netSpots(graph, geometry, nets, ground, voltages),
     [graph, geometry, nets, ground, voltages],
   );
-  const { nodes, edges } = useFlowElements(drawing, geometry, nets, selection, slipPart);
+  // Where there is no room on the wires for a net's name, the name's own symbol has to show it.
+  const written = useMemo(() => {
+    const shown = new Set(spots.filter(({ named }) => named).map(({ net }) => net));
+    const isShown = (part: DrawnPart | undefined) => part?.kind === 'net-name' && shown.has(part.values.net);
+    return new Set([...graph.namesOnWires].filter((id) => isShown(geometry.parts.get(id))));
+  }, [spots, graph, geometry]);
+  const { nodes, edges } = useFlowElements(drawing, geometry, nets, selection, slipPart, written);
   const litLines = useMemo(() => {
     const netOf = (id: WireId) => {
       const wire = drawing.wires.find((candidate) => candidate.id === id);
@@ -219,7 +226,11 @@ function Board(props: CanvasProps) {
           <Marks geometry={geometry} selected={selection.parts} lit={props.lit} others={props.others} />
           <HandMarks placing={placing} wiring={wiring} geometry={geometry} />
         </ViewportLayer>
-        {slip !== undefined && slipOn && <SlipOverlay part={slipOn}>{slip}</SlipOverlay>}
+        {slip !== undefined && slipOn && (
+          <SlipOverlay key={slipOn.id} part={slipOn} onFocusLost={() => focus(`[data-part="${slipOn.id}"]`)}>
+            {slip}
+          </SlipOverlay>
+        )}
       </section>
       <Tray
         canEdit={commands.canEdit}
@@ -246,6 +257,18 @@ function Board(props: CanvasProps) {
       />
       <KeysDialog open={keysShown} onOpenChange={setKeysShown} />
     </div>
+  );
+}
+
+/** React's StrictMode makes React Flow v11 believe, in development, that its constants are made anew (warning 002). */
+function useQuietStrictMode() {
+  const store = useStoreApi();
+  useState(() =>
+    store.setState({
+      onError: (code, message) => {
+        if (code !== '002') console.warn(message);
+      },
+    }),
   );
 }
 

@@ -21,6 +21,8 @@ export type PartData = {
   readonly depletion: boolean;
   /** Its slip is open in the tag's place. */
   readonly slipOpen: boolean;
+  /** A net name that stands on a wire, where the wire itself shows it. */
+  readonly written: boolean;
 };
 export type PartNodeType = Node<PartData, 'part'>;
 
@@ -37,12 +39,18 @@ export function useFlowElements(
   { netOf }: DrawnNets,
   selection: Selection,
   slipPart: PartId | undefined,
+  written: ReadonlySet<PartId>,
 ): { nodes: PartNodeType[]; edges: WireEdgeType[] } {
   const lastNodes = useRef<ReadonlyMap<string, PartNodeType>>(new Map());
   const lastEdges = useRef<ReadonlyMap<string, WireEdgeType>>(new Map());
 
   const nodes = [...geometry.parts.values()].map((part) => {
-    const data = { part, depletion: isDepletion(part, drawing.settings), slipOpen: part.id === slipPart };
+    const data = {
+      part,
+      depletion: isDepletion(part, drawing.settings),
+      slipOpen: part.id === slipPart,
+      written: written.has(part.id),
+    };
     return sameNode(lastNodes.current.get(part.id), data, selection.parts.has(part.id));
   });
   const edges = drawing.wires.flatMap((wire) => {
@@ -61,7 +69,8 @@ function sameNode(last: PartNodeType | undefined, next: PartData, selected: bool
     last !== undefined &&
     last.data.part === next.part &&
     last.data.depletion === next.depletion &&
-    last.data.slipOpen === next.slipOpen;
+    last.data.slipOpen === next.slipOpen &&
+    last.data.written === next.written;
   if (unchanged && last.selected === selected) return last;
   const { part } = next;
   const box = boxOnSheet(part.kind, part.place);

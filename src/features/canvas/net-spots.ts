@@ -12,6 +12,8 @@ export type NetSpot = { readonly net: string; readonly named: boolean; readonly 
 /** Advance of one character at 12 px, as the bundled face has it. */
 const CHARACTER = 7.2;
 const LINE = 16;
+/** Of that, what the letters take above and below the middle. */
+const CAP = 5;
 /** Characters of a voltage such as `−0.425 V`, the space before it included. */
 const VOLTAGE_CHARACTERS = 8;
 /** A tag with its three lines. */
@@ -75,7 +77,7 @@ function obstacles(geometry: SheetGeometry): Box[] {
 }
 
 function boxAbout({ x, y }: GridPoint, width: number): Box {
-  return { left: x - width / 2, top: y - LINE / 2, right: x + width / 2, bottom: y + LINE / 2 };
+  return { left: x - width / 2, top: y - CAP, right: x + width / 2, bottom: y + CAP };
 }
 
 function lengthOf({ from, to }: Run): number {

@@ -12,7 +12,7 @@ import { orientation, PartSymbol } from './symbols';
 /** A part on the sheet: its symbol, terminals, texts and tag. The outer element that places it is React Flow's. */
 export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps<PartData>) {
   const { Tag } = useCanvasParts();
-  const { part, depletion, slipOpen } = data;
+  const { part, depletion, slipOpen, written } = data;
   const { place } = part;
   const box = boxOnSheet(part.kind, place);
   const pins = pinPlaces(part.kind, place, bodyLedOut(part));
@@ -27,7 +27,7 @@ export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps
     <div className="part" style={{ width: box.right - box.left, height: box.bottom - box.top }}>
       {/* biome-ignore lint/a11y/useSemanticElements: React Flow drags by the element under the pointer, and a button takes no drag */}
       <div
-        className="part-face"
+        className={written ? 'part-face part-written' : 'part-face'}
         role="button"
         tabIndex={-1}
         aria-label={spokenPart(part)}
@@ -38,14 +38,15 @@ export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps
         <svg className="symbol" width="1" height="1" aria-hidden="true">
           {/* Half a pixel aside, so that hairlines fall on whole ones. */}
           <g transform={`translate(${place.x - box.left + 0.5} ${place.y - box.top + 0.5}) ${orientation(place)}`}>
-            {isFet(part) ? <FetOnSheet part={part} depletion={depletion} /> : <PartSymbol kind={part.kind} />}
+            {isFet(part) && <FetOnSheet part={part} depletion={depletion} />}
+            {!isFet(part) && !written && <PartSymbol kind={part.kind} />}
           </g>
         </svg>
       </div>
       {pins.map((pin) => (
         <Terminal key={pin.pin} part={part} pin={pin} box={box} />
       ))}
-      <PartLabel part={part} box={box} />
+      {!written && <PartLabel part={part} box={box} />}
       {isFet(part) && !slipOpen && (
         <div className="part-tag" style={hang(tagAnchor(part), box)}>
           <Tag part={part} />

@@ -3,19 +3,34 @@ import { useStore, useViewport } from 'reactflow';
 import { type DrawnPart, isFet } from '#shared/circuit/drawing';
 import { outset } from './brackets';
 import { type Box, boxOnSheet, labelAnchor, tagAnchor } from './symbol-box';
+import { useLatest } from './use-latest';
 
 type Size = { readonly width: number; readonly height: number };
 
 /** Free space kept about the slip, in px of the window. */
 const GAP = 10;
 
+type SlipOverlayProps = {
+  readonly part: DrawnPart;
+  /** The slip closed with the focus in it. */
+  onFocusLost(): void;
+  readonly children: ReactNode;
+};
+
 /** The open slip, at its own size beside its part whatever the zoom, and wholly within the drawing where it fits. */
-export function SlipOverlay({ part, children }: { part: DrawnPart; children: ReactNode }) {
+export function SlipOverlay({ part, onFocusLost, children }: SlipOverlayProps) {
   const { x, y, zoom } = useViewport();
   const width = useStore((state) => state.width);
   const height = useStore((state) => state.height);
   const ref = useRef<HTMLDivElement>(null);
   const size = useSize(ref);
+  const focusLost = useLatest(onFocusLost);
+  useLayoutEffect(() => {
+    const element = ref.current;
+    return () => {
+      if (element?.contains(document.activeElement)) focusLost.current();
+    };
+  }, [focusLost]);
   const box = outset(boxOnSheet(part.kind, part.place));
   const anchor = (isFet(part) ? tagAnchor(part) : labelAnchor(part))?.at ?? part.place;
   const onScreen = {

@@ -101,15 +101,19 @@ export function orientation(place: Pick<Place, 'turn' | 'flip'>): string {
   return `matrix(${x.x} ${x.y} ${y.x} ${y.y} 0 0)`;
 }
 
-/** A symbol at half size, as the tray shows it. */
+/** How large the tray shows a symbol; the small ones less reduced. */
+const ICON_SCALE: Partial<Record<SymbolKind, number>> = { capacitor: 0.7, ground: 0.9, supply: 0.9, 'net-name': 0.9 };
+
+/** A symbol as the tray shows it. */
 export function SymbolIcon({ kind }: { kind: SymbolKind }) {
   const { left, top, right, bottom } = ownBox(kind);
+  const scale = ICON_SCALE[kind] ?? 0.55;
   return (
     <svg
       className="symbol symbol-icon"
-      width={(right - left) / 2 + 4}
-      height={(bottom - top) / 2 + 4}
-      viewBox={`${left - 4} ${top - 4} ${right - left + 8} ${bottom - top + 8}`}
+      width={(right - left) * scale}
+      height={(bottom - top) * scale}
+      viewBox={`${left} ${top} ${right - left} ${bottom - top}`}
       aria-hidden="true"
     >
       <PartSymbol kind={kind} />

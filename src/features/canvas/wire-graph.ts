@@ -1,4 +1,4 @@
-import type { Drawing } from '#shared/circuit/drawing';
+import type { Drawing, PartId } from '#shared/circuit/drawing';
 import { type DrawnNets, terminalKey } from '#shared/circuit/nets';
 import { GRID, type GridPoint } from '#shared/geometry/place';
 import type { SheetGeometry } from './sheet-geometry';
@@ -10,6 +10,8 @@ export type WireGraph = {
   /** Where three or more ends meet, and junctions that nothing holds any more. */
   readonly dots: readonly GridPoint[];
   readonly runsOf: ReadonlyMap<string, readonly Run[]>;
+  /** Net names that stand on a wire or a terminal pair, not at a free end. */
+  readonly namesOnWires: ReadonlySet<PartId>;
 };
 
 const RIGHT = 1;
@@ -52,9 +54,20 @@ export function wireGraph(drawing: Drawing, geometry: SheetGeometry, { netOf }: 
       }
     }
   }
-  for (const [key, { at: point, leaves }] of geometry.terminals) {
+  const names: { part: PartId; directions: Directions; way: number }[] = [];
+  for (const [key, { part, at: point, leaves }] of geometry.terminals) {
     const net = netOf.get(key);
-    if (net !== undefined) at(net, point).all |= wayOf({ x: -leaves.x, y: -leaves.y });
+    if (net === undefined) continue;
+    const directions = at(net, point);
+    const way = wayOf({ x: -leaves.x, y: -leaves.y });
+    if (part.kind === 'net-name') names.push({ part: part.id, directions, way });
+    else directions.all |= way;
+  }
+  const namesOnWires = new Set<PartId>();
+  for (const { part, directions, way } of names) {
+    // A name set on a wire is written into it, so its lead is not drawn and makes no dot.
+    if (count(directions.all) >= 2) namesOnWires.add(part);
+    else directions.all |= way;
   }
 
   const crossed = new Map<string, number>();
@@ -71,13 +84,16 @@ export function wireGraph(drawing: Drawing, geometry: SheetGeometry, { netOf }: 
     const directions = nets.get(netOf.get(terminalKey(end)) ?? '')?.get(keyOf(point));
     if (!directions || count(directions.all) < 2) dots.set(keyOf(point), point);
   }
-  return { dots: [...dots.values()], runsOf };
+  return { dots: [...dots.values()], runsOf, namesOnWires };
 }
 
 function runs(points: ReadonlyMap<string, Directions>, crossed: ReadonlyMap<string, number>, way: number): Run[] {
   const upright = way === DOWN;
   const through = upright ? UP | DOWN : LEFT | RIGHT;
-  const plain = (key: string) => points.get(key)?.all === through && crossed.get(key) === 1;
+  const plain = (key: string) => {
+    const here = points.get(key);
+    return here?.wires === through && here.all === through && crossed.get(key) === 1;
+  };
   const found: Run[] = [];
   for (const [key, { wires }] of points) {
     if ((wires & way) === 0 || plain(key)) continue;
