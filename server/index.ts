@@ -8,6 +8,8 @@ function modeOf(args: readonly string[]): Mode {
 }
 
 async function main(): Promise<void> {
+  // The database, its copies and the demo's password are for this account's eyes.
+  process.umask(0o077);
   const config = readConfig(modeOf(process.argv.slice(2)), process.env);
   const running = await startServer(config);
   const lines = [`Stillpoint is at ${running.url}`];
@@ -36,7 +38,9 @@ async function main(): Promise<void> {
 }
 
 function fail(error: unknown): never {
-  process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`);
+  const message = error instanceof Error ? error.message : String(error);
+  const hint = message.includes('EADDRINUSE') ? '\nAnother program has this port: set PORT to a free one.' : '';
+  process.stderr.write(`${message}${hint}\n`);
   process.exit(1);
 }
 

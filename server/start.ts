@@ -106,9 +106,10 @@ export async function startServer(config: Config, replaced: Replacements = {}): 
       rooms.shutDown();
       server.closeIdleConnections();
       const deadline = setTimeout(() => server.closeAllConnections(), STOP_WITHIN);
+      // Vite has sockets of its own on this server.
+      await pages.close?.();
       await closed;
       clearTimeout(deadline);
-      await pages.close?.();
       sqlite.close();
     },
   };
