@@ -15,6 +15,13 @@ export interface Conditions {
   readonly held?: Float64Array | undefined;
 }
 
+/** ID = gds·VDS + gm·VGS + offset, in the N frame of a model: S, S, A. */
+export interface LinearFet {
+  readonly gds: number;
+  readonly gm: number;
+  readonly offset: number;
+}
+
 export const TRUE_CIRCUIT: Conditions = { leakage: 0, supply: 1 };
 
 /**
@@ -64,22 +71,25 @@ export class Equations {
     if (conditions.held) this.#hold(x, conditions.held);
   }
 
-  /** As `evaluate`, with every channel replaced by a resistor of the conductance given: a linear circuit. */
-  evaluateLinear(x: Float64Array, leakage: number, conductanceOf: (model: FetModel) => number): void {
+  /** As `evaluate`, with every FET replaced by the linear device given, so that the whole circuit is linear. */
+  evaluateLinear(x: Float64Array, leakage: number, linearised: (model: FetModel) => LinearFet): void {
     this.residual.fill(0);
     this.throughput.fill(0);
     this.jacobian.fill(0);
     this.spreadVoltages(x);
     this.#addResistors();
     this.#addCurrents(1);
-    for (const { model, drain, source, slots } of this.network.fets) {
-      const conductance = conductanceOf(model);
-      const current = conductance * ((this.netVoltages[drain] ?? 0) - (this.netVoltages[source] ?? 0));
+    const v = this.netVoltages;
+    for (const { model, drain, gate, source, slots } of this.network.fets) {
+      const { gm, gds, offset } = linearised(model);
+      const across = gds * ((v[drain] ?? 0) - (v[source] ?? 0));
+      const current = across + gm * ((v[gate] ?? 0) - (v[source] ?? 0)) + model.sign * offset;
       this.#leave(drain, current);
       this.#leave(source, -current);
       for (const [row, direction] of ROWS) {
-        this.#add(slots[row] ?? -1, direction * conductance);
-        this.#add(slots[row + 2] ?? -1, -direction * conductance);
+        this.#add(slots[row] ?? -1, direction * gds);
+        this.#add(slots[row + 1] ?? -1, direction * gm);
+        this.#add(slots[row + 2] ?? -1, -direction * (gm + gds));
       }
     }
     this.#addLeakage(leakage);

@@ -26,9 +26,13 @@ export type Settled =
   /** `x` is the attempt with the least remaining current; the true circuit's residual there is the caller's to read. */
   | { readonly kind: 'none'; readonly x: Float64Array; readonly iterations: number };
 
+type Failure = Exclude<Settled, Point>;
+
 const NEWTON_ITERATIONS = 60;
 /** Unknowns above which further starts cost more than they are likely to find. */
 const MOST_UNKNOWNS_FOR_MORE_STARTS = 200;
+/** V, within which two solutions are one. */
+const SAME_VOLTAGE = 1e-6;
 /** V, how far a circuit is pushed from an unstable point to see where it goes. */
 const PUSH = 0.1;
 
@@ -38,38 +42,41 @@ const PUSH = 0.1;
  */
 export function settle(equations: Equations): Settled {
   const points: Point[] = [];
-  let failure: Exclude<Settled, Point> | null = null;
+  let failure: Failure | null = null;
   let iterations = 0;
   for (const start of startingPoints(equations)) {
     const settled = settleFrom(equations, start);
     iterations += settled.iterations;
     if (settled.kind === 'point') {
+      if (points.some((known) => isSame(known.x, settled.x))) continue;
       points.push(settled);
-      const allOn = measure(equations, settled.x).on === equations.network.fets.length;
-      if (allOn && !settled.surelyUnstable) break;
+      for (const left of settled.surelyUnstable ? leave(equations, settled) : []) {
+        iterations += left.iterations;
+        if (left.kind === 'point') points.push(left);
+      }
+      if (isFirstOfAll(equations, rank(equations, points)[0])) break;
     } else {
       failure = graver(equations, failure, settled);
       if (settled.kind === 'free-range') break;
     }
-    if (equations.size > MOST_UNKNOWNS_FOR_MORE_STARTS && points.length > 0) break;
-  }
-  const [first] = rank(equations, points);
-  if (first?.surelyUnstable) {
-    for (const settled of leave(equations, first)) {
-      iterations += settled.iterations;
-      if (settled.kind === 'point') points.push(settled);
-    }
+    if (equations.size > MOST_UNKNOWNS_FOR_MORE_STARTS) break;
   }
   const chosen = rank(equations, points)[0] ?? failure;
   return chosen ? { ...chosen, iterations } : { kind: 'none', x: new Float64Array(equations.size), iterations };
 }
 
+/** Nothing is listed before a point with every FET on that is not surely unstable, but for one with more power. */
+function isFirstOfAll(equations: Equations, point: Point | undefined): boolean {
+  if (!point || point.surelyUnstable) return false;
+  return measure(equations, point.x).on === equations.network.fets.length;
+}
+
+function isSame(a: Float64Array, b: Float64Array): boolean {
+  return a.every((voltage, group) => Math.abs(voltage - (b[group] ?? 0)) <= SAME_VOLTAGE);
+}
+
 /** Of two failures the one that says more: a free range, else the one nearer to balance. */
-function graver(
-  equations: Equations,
-  one: Exclude<Settled, Point> | null,
-  other: Exclude<Settled, Point>,
-): Exclude<Settled, Point> {
+function graver(equations: Equations, one: Failure | null, other: Failure): Failure {
   if (one === null || other.kind === 'free-range') return other;
   if (one.kind === 'free-range') return one;
   return imbalance(equations, other.x) < imbalance(equations, one.x) ? other : one;

@@ -1,30 +1,45 @@
-import type { Equations } from './equations';
+import type { FetModel } from '../device/fet-model';
+import type { Equations, LinearFet } from './equations';
 import { SEARCH_LEAKAGE } from './polish';
 
-/** V, the overdrive that every channel is given in the linear circuit a start is computed from. */
-const ASSUMED_OVERDRIVE = 0.5;
-
-/** How strongly N and P channels conduct in the linear circuit: evenly first, then each pulling the nets its own way. */
-const BIASES = [
-  { n: 1, p: 1 },
-  { n: 30, p: 1 / 30 },
-  { n: 1 / 30, p: 30 },
-] as const;
+/** V, the overdrive that a channel is given where it stands in as a resistor. */
+const RESISTOR_OVERDRIVE = 0.5;
+/** Share of its transconductance that a saturated device is given between drain and source, so that no gain is large. */
+const SATURATED_SLOPE = 0.1;
 
 /**
- * Starts for Newton's method, in the order they are tried: all channels on (as resistors, so the circuit is linear), which
- * lets self-biased circuits begin where they carry current; the same leaning to either side; and all nets at 0 V.
+ * Starts for Newton's method, in the order they are tried, each the solution of a linear circuit: all channels on as
+ * resistors, which lets self-biased circuits begin where they carry current; all devices saturated at an overdrive;
+ * the resistors leaning to N and to P; and last all nets at 0 V.
  */
 export function startingPoints(equations: Equations): Float64Array[] {
-  return [...BIASES.map((bias) => allChannelsOn(equations, bias)), new Float64Array(equations.size)];
+  return [
+    solveLinear(equations, resistor(1, 1)),
+    solveLinear(equations, saturated(0.2)),
+    solveLinear(equations, saturated(0.6)),
+    solveLinear(equations, resistor(30, 1 / 30)),
+    solveLinear(equations, resistor(1 / 30, 30)),
+    new Float64Array(equations.size),
+  ];
 }
 
-function allChannelsOn(equations: Equations, bias: { n: number; p: number }): Float64Array {
+function resistor(n: number, p: number): (model: FetModel) => LinearFet {
+  return ({ sign, kn }) => ({ gds: kn * RESISTOR_OVERDRIVE * (sign > 0 ? n : p), gm: 0, offset: 0 });
+}
+
+function saturated(overdrive: number): (model: FetModel) => LinearFet {
+  return ({ kn, threshold }) => {
+    const gm = kn * overdrive;
+    return { gds: SATURATED_SLOPE * gm, gm, offset: (gm * overdrive) / 2 - gm * (threshold + overdrive) };
+  };
+}
+
+function solveLinear(equations: Equations, linearised: (model: FetModel) => LinearFet): Float64Array {
   const { jacobian, lu, size } = equations;
   const x = new Float64Array(size);
-  equations.evaluateLinear(x, SEARCH_LEAKAGE, ({ sign, kn }) => kn * ASSUMED_OVERDRIVE * (sign > 0 ? bias.n : bias.p));
+  equations.evaluateLinear(x, SEARCH_LEAKAGE, linearised);
   if (size === 0 || !lu.factor(jacobian)) return x;
-  const step = equations.residual.map((sum) => -sum);
-  lu.solve(step);
-  return step.every(Number.isFinite) ? step : x;
+  const solution = equations.residual.map((sum) => -sum);
+  lu.solve(solution);
+  return solution.every(Number.isFinite) ? solution : x;
 }
