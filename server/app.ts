@@ -33,7 +33,8 @@ export function createApp({ context, log, ownOrigins, trustProxy, tls, pages, is
   app.disable('x-powered-by');
   app.use(requestLog(log));
   // Vite's hot reload runs inline scripts, on the developer's own machine only.
-  if (pages.from !== 'vite') app.use(securityHeaders({ tls, socketOrigins: [...ownOrigins()].map(socketOrigin) }));
+  if (pages.from !== 'vite')
+    app.use(securityHeaders({ tls, socketOrigins: [...ownOrigins()].map(socketOrigin).filter(isPolicySource) }));
   app.get('/healthz', (_request, response) => {
     response.json({ status: 'alive' });
   });
@@ -58,6 +59,11 @@ function servePages(app: Express, folder: string): void {
   app.get('/{*path}', (_request, response) => {
     response.set('Cache-Control', 'no-cache').sendFile('index.html', { root: resolve(folder) });
   });
+}
+
+/** A content security policy knows no IPv6 addresses; browsers warn of one and ignore it. */
+function isPolicySource(origin: string): boolean {
+  return !origin.includes('[');
 }
 
 function socketOrigin(origin: string): string {

@@ -1,3 +1,4 @@
+import { readAuthMessage } from 'y-protocols/auth';
 import { messageAuth, WebsocketProvider } from 'y-websocket';
 import * as Y from 'yjs';
 import { OWN_EDIT, sheetMaps } from '#shared/doc/sheet-maps';
@@ -28,12 +29,18 @@ const REFUSALS: Readonly<Record<number, Extract<RoomState, { kind: 'refused' }>[
   4404: 'not-found',
 };
 
-/** Opens a sheet. `onDenied` is called when the server dropped a change because this person may only look. */
-export function openRoom(sheetId: string, onDenied: () => void): Room {
+/** Why the server dropped a change: this person may only look, or the change was too large. */
+export type Denial = 'not-allowed' | 'too-large';
+
+/** Opens a sheet. `onDenied` is called when the server dropped a change made here. */
+export function openRoom(sheetId: string, onDenied: (denial: Denial) => void): Room {
   const doc = new Y.Doc();
   const provider = new WebsocketProvider(syncAddress(), sheetId, doc, { connect: false, disableBc: true });
   sendOwnPresenceOnly(provider);
-  provider.messageHandlers[messageAuth] = onDenied;
+  provider.messageHandlers[messageAuth] = (_encoder, decoder) =>
+    readAuthMessage(decoder, doc, (_doc, reason) =>
+      onDenied(reason.startsWith('too-large') ? 'too-large' : 'not-allowed'),
+    );
   const undo = new Y.UndoManager(Object.values(sheetMaps(doc)), {
     trackedOrigins: new Set([OWN_EDIT]),
     captureTimeout: 0,

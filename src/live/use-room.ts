@@ -1,10 +1,13 @@
 import { useCallback, useEffect, useState, useSyncExternalStore } from 'react';
-import { openRoom, type Room, type RoomState } from './room';
+import { type Denial, openRoom, type Room, type RoomState } from './room';
 
 const OPENING: RoomState = { kind: 'opening', unreachable: false };
 
 /** The live room of a sheet for as long as the component is there; `onDenied` must be stable. */
-export function useRoom(sheetId: string, onDenied: () => void): { room: Room | undefined; state: RoomState } {
+export function useRoom(
+  sheetId: string,
+  onDenied: (denial: Denial) => void,
+): { room: Room | undefined; state: RoomState } {
   const [room, setRoom] = useState<Room>();
   useEffect(() => {
     const opened = openRoom(sheetId, onDenied);

@@ -3,6 +3,7 @@ import { useParams } from 'react-router-dom';
 import type { SheetAnswer } from '#shared/api/sheets';
 import { ApiError } from '../api/client';
 import { useSheet } from '../api/sheets';
+import type { Denial } from '../live/room';
 import { useRoom } from '../live/use-room';
 import { ButtonLink } from '../ui/button';
 import { Empty, Failure } from '../ui/notice';
@@ -38,19 +39,28 @@ function NotOpened({ error, retry }: { error: Error; retry: () => void }) {
   return <Failure onRetry={retry}>The sheet could not be opened. {error.message}</Failure>;
 }
 
+const DENIAL_WORDS: Readonly<Record<Denial, string>> = {
+  'not-allowed':
+    'Your last change was not shared: you may only look at this sheet now. It shows what everyone else sees.',
+  'too-large': 'Your last change was too large to share. The sheet shows what everyone else sees: change less at once.',
+};
+
 /** The live connection to a sheet; begun anew after the server refused a change, for then the copy here is not the shared one. */
 function LiveSheet({ answer, refetch }: { answer: SheetAnswer; refetch: () => void }) {
   const [attempt, setAttempt] = useState(0);
   const { warn } = useStatus();
-  const onDenied = useCallback(() => {
-    warn('Your last change was not shared: you may only look at this sheet now. It shows what everyone else sees.');
-    setAttempt((before) => before + 1);
-    refetch();
-  }, [warn, refetch]);
+  const onDenied = useCallback(
+    (denial: Denial) => {
+      warn(DENIAL_WORDS[denial]);
+      setAttempt((before) => before + 1);
+      refetch();
+    },
+    [warn, refetch],
+  );
   return <ConnectedSheet key={attempt} answer={answer} onDenied={onDenied} />;
 }
 
-function ConnectedSheet({ answer, onDenied }: { answer: SheetAnswer; onDenied: () => void }) {
+function ConnectedSheet({ answer, onDenied }: { answer: SheetAnswer; onDenied: (denial: Denial) => void }) {
   const { room, state } = useRoom(answer.sheet.id, onDenied);
   if (state.kind === 'refused') {
     return (

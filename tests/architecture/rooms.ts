@@ -25,7 +25,8 @@ export const ROOMS: Readonly<Record<string, readonly string[]>> = {
   'src/pages': ['src/features', 'src/live', 'src/workers', 'src/ui', 'src/api', 'src/keys', 'src/formats', 'shared'],
   'src/app': ['src/pages', 'src/features', 'src/ui', 'src/api', 'src/formats', 'shared'],
 
-  'server/index.ts': [
+  'server/index.ts': ['server/start.ts', 'server/config.ts'],
+  'server/start.ts': [
     'server/app.ts',
     'server/config.ts',
     'server/db',
