@@ -80,7 +80,7 @@ export function ValueField<T>({
           value={draft ?? show(value)}
           aria-invalid={reason !== undefined}
           aria-describedby={reason === undefined ? undefined : `${id}-reason`}
-          className={`w-full border-b bg-transparent focus:border-focus ${
+          className={`w-full border-b bg-transparent outline-none focus:border-focus focus:shadow-[0_1px_var(--focus)] ${
             reason === undefined ? 'border-edge' : 'border-missed'
           } ${className}`}
           onChange={(event) => change(event.target.value)}

@@ -1,7 +1,6 @@
 import { useMemo } from 'react';
 import type { PartId } from '#shared/circuit/drawing';
 import { byReference } from '#shared/circuit/reference-order';
-import { formatScaled } from '#shared/units/format-value';
 import { formatVoltage } from '../../formats/figures';
 import { MarginRuler } from '../../formats/margin-ruler';
 import { REGION_COLOUR, RegionGlyph } from '../../formats/region-glyph';
@@ -80,7 +79,7 @@ function fetColumns(rows: readonly FetRow[], scaleEnd: number): LedgerColumn<Fet
         values.intent ? (
           <span className="flex justify-between gap-2">
             {values.intent.region}
-            <span>{formatScaled(values.intent.margin ?? 0, -3)}</span>
+            <span>{Number(((values.intent.margin ?? 0) * 1e3).toPrecision(4))}</span>
           </span>
         ) : (
           <span className="text-faint">none</span>

@@ -43,22 +43,18 @@ export function LedgerFrame({
       className="relative flex max-h-[60dvh] shrink-0 flex-col border-rule border-t bg-paper"
       style={{ height: collapsed ? undefined : height }}
     >
-      {/* biome-ignore lint/a11y/useSemanticElements: a separator that is dragged takes the focus, which hr cannot say */}
-      <div
-        role="separator"
+      <hr
         aria-orientation="horizontal"
         aria-label="Height of the ledger"
         aria-valuemin={LEAST}
         aria-valuemax={MOST}
         aria-valuenow={collapsed ? LEAST : height}
         tabIndex={0}
-        className="-top-3 absolute left-1/2 z-20 flex h-6 w-16 -translate-x-1/2 cursor-row-resize touch-none items-center justify-center"
+        className="-top-[3px] before:-inset-x-5 before:-inset-y-2.5 absolute left-1/2 z-20 h-[5px] w-6 -translate-x-1/2 cursor-row-resize touch-none border-faint border-y bg-paper before:absolute"
         onPointerDown={(event) => event.currentTarget.setPointerCapture(event.pointerId)}
         onPointerMove={drag}
         onKeyDown={press}
-      >
-        <span className="h-[5px] w-6 border-faint border-y bg-paper" />
-      </div>
+      />
       <div className="flex items-center gap-2 pr-2 sm:pr-4">
         {tabs}
         <button

@@ -49,7 +49,7 @@ export function Ledger({ drawing, nets, selection, onSelect, onLight, onFrame }:
   };
   const common = {
     selected: selection.parts,
-    busy: solution.state === 'outdated' || solution.state === 'pending',
+    busy: solution.state === 'outdated',
     onLight,
     onFrame: goTo,
   };

@@ -50,7 +50,7 @@ export function NetTable({ rows, ...rest }: { rows: readonly NetRow[] } & Common
         compare: (a, b) => (a.name < b.name ? -1 : a.name > b.name ? 1 : 0),
       },
       figures('voltage', 'V', rows, ({ voltage }) => voltage, 0),
-      { key: 'terminals', head: 'terminals', cell: ({ terminals }) => terminals.join('  ') },
+      { key: 'terminals', head: 'terminals', cell: ({ terminals }) => terminals.join(', ') },
     ],
     [rows],
   );

@@ -30,7 +30,7 @@ export function MastheadFigures({ settings, commands }: { settings: SheetSetting
         )}
         {summary && <VerdictCounts counts={summary.verdicts} />}
         {solution.state === 'failed' && <p className="max-w-96 text-missed text-xs">{solution.reason}</p>}
-        {record && <ProblemSummary record={record} />}
+        {record && <ProblemSummary status={record.status} problems={record.problems} />}
       </div>
     </div>
   );
@@ -39,7 +39,7 @@ export function MastheadFigures({ settings, commands }: { settings: SheetSetting
 function Temperature({ celsius, commands }: { celsius: number; commands: SheetCommands }) {
   if (!commands.canEdit) return <p>{formatExact(celsius, '°C')}</p>;
   return (
-    <div className="w-20">
+    <div className="w-18">
       <ValueField
         label="Temperature"
         hideLabel

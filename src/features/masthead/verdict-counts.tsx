@@ -8,7 +8,10 @@ export function VerdictCounts({ counts }: { counts: VerdictTally }) {
   return (
     <ul aria-label="Verdicts" className="flex items-center">
       {present.map((verdict) => (
-        <li key={verdict} className="flex items-center before:px-2 before:text-faint not-first:before:content-['·']">
+        <li
+          key={verdict}
+          className="flex items-center not-first:before:px-2 not-first:before:text-faint not-first:before:content-['·']"
+        >
           <span className={`flex items-center gap-2 ${VERDICT_TEXT[verdict]}`}>
             <VerdictShape verdict={verdict} />
             {counts[verdict]} {verdict}

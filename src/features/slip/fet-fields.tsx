@@ -111,14 +111,15 @@ function BodyField({
   return (
     <>
       <span className="text-faint">body</span>
-      <label className="flex min-h-6 items-center gap-2">
+      <label className="flex items-center gap-2 py-0.5">
         <input
           type="checkbox"
+          aria-label="body led out"
           className="size-3.5 accent-ink"
           checked={ledOut}
           onChange={(event) => onChange(event.target.checked)}
         />
-        body led out
+        led out
       </label>
     </>
   );

@@ -56,7 +56,7 @@ export function ChosenField({
           id={id}
           value={value}
           aria-describedby={note === undefined ? undefined : `${id}-note`}
-          className="-ml-1 w-[calc(100%+0.25rem)] border-edge border-b bg-sheet focus:border-focus"
+          className="-ml-1 w-[calc(100%+0.25rem)] border-edge border-b bg-sheet outline-none focus:border-focus focus:shadow-[0_1px_var(--focus)]"
           onChange={(event) => onChoose(event.target.value)}
         >
           {options.map((option) => (

@@ -46,25 +46,28 @@ export function Slip({ part, settings, nets, commands, onClose }: SlipProps) {
       tabIndex={-1}
       aria-label={`${name}: values`}
       onKeyDown={press}
-      className={`relative isolate grid w-60 gap-2 p-3 text-xs shadow-slip outline-none ${
+      className={`relative isolate w-60 text-xs shadow-slip outline-none ${
         flagged ? '' : 'border border-edge bg-sheet'
       }`}
     >
       {flagged && <VerdictOutline verdict={flagged} />}
-      <header className="flex min-h-6 items-center gap-2 pr-6">
-        <Name part={part} commands={commands} />
-        {isFet(part) && <RegionAndCurrent part={part} />}
-        <button
-          type="button"
-          aria-label="Close"
-          onClick={onClose}
-          className={`absolute right-2 grid size-6 place-items-center text-faint hover:text-ink ${flagged ? 'top-4' : 'top-3'}`}
-        >
-          <X size={14} aria-hidden="true" />
-        </button>
-      </header>
-      <PartFields part={part} settings={settings} nets={nets} commands={commands} firstField={firstField} />
-      {isFet(part) && <Standing part={part} />}
+      {/* As high as the room it is given, and scrolled within: a container's height where there is one, else the window's. */}
+      <div className="grid max-h-[calc(100cqh-1.25rem)] gap-2 overflow-y-auto p-3">
+        <header className="flex min-h-6 items-center gap-2 pr-6">
+          <Name part={part} commands={commands} />
+          {isFet(part) && <RegionAndCurrent part={part} />}
+          <button
+            type="button"
+            aria-label="Close"
+            onClick={onClose}
+            className={`absolute right-2 grid size-6 place-items-center text-faint hover:text-ink ${flagged ? 'top-4' : 'top-3'}`}
+          >
+            <X size={14} aria-hidden="true" />
+          </button>
+        </header>
+        <PartFields part={part} settings={settings} nets={nets} commands={commands} firstField={firstField} />
+        {isFet(part) && <Standing part={part} />}
+      </div>
     </section>
   );
 }

@@ -73,7 +73,7 @@ function NoFigures({ working, problems }: { working: boolean; problems: readonly
   return (
     <>
       <p className="text-faint">{working ? 'solving' : 'not solved'}</p>
-      {!working && <ProblemNote problems={errors} />}
+      {!working && (errors.length > 0 ? <ProblemNote problems={errors} /> : <RemarkMark problems={problems} />)}
     </>
   );
 }
