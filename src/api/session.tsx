@@ -45,7 +45,7 @@ export function useSignOut(then = '/sign-in') {
 
 function useRefreshMe() {
   const client = useQueryClient();
-  return () => client.fetchQuery({ queryKey: keys.me, queryFn: fetchMe });
+  return () => client.fetchQuery({ queryKey: keys.me, queryFn: fetchMe, staleTime: 0 });
 }
 
 const SessionContext = createContext<MeAnswer | null>(null);

@@ -5,8 +5,8 @@ type Look = 'plain' | 'strong' | 'quiet' | 'danger';
 
 const LOOKS: Record<Look, string> = {
   plain: 'border border-edge bg-sheet px-3.5 hover:bg-paper',
-  strong: 'border border-ink bg-ink px-3.5 text-sheet hover:border-focus hover:bg-focus',
-  quiet: 'px-1 underline decoration-edge underline-offset-4 hover:decoration-current',
+  strong: 'border border-ink bg-ink px-3.5 text-sheet hover:border-faint hover:bg-faint',
+  quiet: 'underline decoration-edge underline-offset-4 hover:decoration-current',
   danger: 'border border-missed bg-sheet px-3.5 text-missed hover:bg-missed hover:text-sheet',
 };
 

@@ -17,11 +17,14 @@ export function EntryFrame({ figure, children }: EntryFrameProps) {
         {figure}
       </div>
       <div className="flex flex-col border-double border-rule px-4 pt-6 pb-12 sm:px-10 lg:border-l-4 lg:pt-10">
-        <div className="mx-auto flex w-full max-w-88 items-center gap-3">
-          <Mark />
-          <span className="text-xl">Stillpoint</span>
-        </div>
-        <main id="main" tabIndex={-1} className="mx-auto my-auto w-full max-w-88 pt-10 outline-none">
+        <header className="mx-auto w-full max-w-88">
+          <p className="flex items-center gap-3 text-xl">
+            <Mark />
+            Stillpoint
+          </p>
+          <p className="mt-2 text-xs text-balance text-faint">Settle the DC bias of a transistor stage together.</p>
+        </header>
+        <main id="main" tabIndex={-1} className="mx-auto w-full max-w-88 pt-10 outline-none lg:my-auto">
           {children}
         </main>
       </div>

@@ -1,4 +1,5 @@
 import { type InputHTMLAttributes, type ReactNode, type Ref, type SelectHTMLAttributes, useId } from 'react';
+import { Select } from './select';
 
 interface FieldNotes {
   readonly label: string;
@@ -7,8 +8,7 @@ interface FieldNotes {
   readonly hint?: string | undefined;
 }
 
-const BOX =
-  'h-9 w-full min-w-0 border border-edge bg-sheet px-2.5 aria-invalid:border-missed aria-invalid:outline-missed read-only:bg-paper';
+const BOX = 'h-9 w-full min-w-0 border border-edge bg-sheet px-2.5 aria-invalid:border-missed read-only:bg-paper';
 
 interface TextFieldProps extends InputHTMLAttributes<HTMLInputElement>, FieldNotes {
   readonly ref?: Ref<HTMLInputElement>;
@@ -45,9 +45,15 @@ export function SelectField({ label, error, hint, className = '', children, ...s
   return (
     <div className={className}>
       <FieldLabel id={id} label={label} />
-      <select {...select} id={id} className={BOX} aria-invalid={error !== undefined} {...describedBy(id, error, hint)}>
+      <Select
+        {...select}
+        id={id}
+        className="h-9 w-full"
+        aria-invalid={error !== undefined}
+        {...describedBy(id, error, hint)}
+      >
         {children}
-      </select>
+      </Select>
       <FieldNotesBelow id={id} error={error} hint={hint} />
     </div>
   );

@@ -42,7 +42,7 @@ export function PageFrame({ title, home, places, person, margin, children }: Pag
         </nav>
         {person}
       </header>
-      <div className="grid flex-1 grid-cols-1 lg:grid-cols-[minmax(0,1fr)_20rem]">
+      <div className="grid flex-1 grid-cols-1 grid-rows-[auto_1fr] lg:grid-rows-1 lg:grid-cols-[minmax(0,1fr)_20rem]">
         <main id="main" tabIndex={-1} className="min-w-0 px-4 pt-6 pb-12 outline-none sm:px-6">
           {children}
         </main>

@@ -14,11 +14,11 @@ export function HeadCell({ className = '', ...rest }: ThHTMLAttributes<HTMLTable
     <th
       scope="col"
       {...rest}
-      className={`border-b border-edge py-2 pr-6 text-xs whitespace-nowrap text-faint last:pr-0 ${className}`}
+      className={`border-b border-edge py-2 pr-3 text-xs sm:pr-6 whitespace-nowrap text-faint last:pr-0 sm:last:pr-0 ${className}`}
     />
   );
 }
 
 export function Cell({ className = '', ...rest }: TdHTMLAttributes<HTMLTableCellElement>) {
-  return <td {...rest} className={`border-b border-rule py-2 pr-6 last:pr-0 ${className}`} />;
+  return <td {...rest} className={`border-b border-rule py-2 pr-3 last:pr-0 sm:pr-6 sm:last:pr-0 ${className}`} />;
 }

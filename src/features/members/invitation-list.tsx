@@ -41,7 +41,7 @@ export function InvitationList({ teamId }: { readonly teamId: string }) {
               </div>
               <Button
                 look="quiet"
-                className="text-xs whitespace-nowrap"
+                className="-my-1.5 text-xs whitespace-nowrap"
                 aria-label={`Take back the link for ${invitation.email ?? `one ${invitation.role}`}`}
                 busy={revoke.isPending && revoke.variables === invitation.id}
                 onClick={() => takeBack(invitation)}

@@ -8,6 +8,7 @@ import { initialsOf } from '../../formats/initials';
 import { Button } from '../../ui/button';
 import { Initials } from '../../ui/initials';
 import { Failure } from '../../ui/notice';
+import { Select } from '../../ui/select';
 import { useStatus } from '../../ui/status';
 import { Cell, HeadCell, Table } from '../../ui/table';
 import { Waiting } from '../../ui/waiting';
@@ -42,7 +43,7 @@ export function MemberTable({ team }: { readonly team: OwnTeam }) {
       <Table label="Members">
         <thead>
           <tr>
-            <HeadCell className="w-full">name</HeadCell>
+            <HeadCell className="w-full sm:w-3/5">name</HeadCell>
             <HeadCell>role</HeadCell>
             <HeadCell className="hidden md:table-cell">joined</HeadCell>
             <HeadCell>
@@ -59,21 +60,23 @@ export function MemberTable({ team }: { readonly team: OwnTeam }) {
               <tr key={member.id}>
                 <Cell className="max-w-0">
                   <div className="flex items-center gap-3">
-                    <Initials text={initialsOf(member.name)} own={own} />
-                    <div className="min-w-0">
-                      <p className="truncate font-bold">
+                    <span className="hidden sm:block">
+                      <Initials text={initialsOf(member.name)} own={own} />
+                    </span>
+                    <div className="min-w-0 wrap-anywhere">
+                      <p className="font-bold">
                         {member.name}
                         {own && <span className="font-normal text-faint"> (you)</span>}
                       </p>
-                      <p className="truncate text-xs text-faint">{member.email}</p>
+                      <p className="text-xs text-faint">{member.email}</p>
                     </div>
                   </div>
                 </Cell>
                 <Cell className="whitespace-nowrap">
                   {manages ? (
-                    <select
+                    <Select
                       aria-label={`Role of ${member.name}`}
-                      className="h-8 border border-edge bg-sheet px-1.5"
+                      className="h-8 w-32"
                       value={chosen ? changeRole.variables.role : member.role}
                       onChange={(event) => {
                         const role = ROLES.find((one) => one === event.target.value);
@@ -83,7 +86,7 @@ export function MemberTable({ team }: { readonly team: OwnTeam }) {
                       {ROLES.map((role) => (
                         <option key={role}>{role}</option>
                       ))}
-                    </select>
+                    </Select>
                   ) : (
                     member.role
                   )}

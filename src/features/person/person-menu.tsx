@@ -27,7 +27,7 @@ export function PersonMenu() {
         <button
           type="button"
           aria-label={`${person.name}, your menu`}
-          className="flex size-8 items-center justify-center"
+          className="-mr-1 flex size-8 items-center justify-center"
         >
           <Initials text={initialsOf(person.name)} own />
         </button>

@@ -25,10 +25,10 @@ export function SheetList({ label, sheets, action }: SheetListProps) {
     <Table label={label}>
       <thead>
         <tr>
-          <HeadCell className="w-full">name</HeadCell>
+          <HeadCell className="w-full sm:w-1/2">name</HeadCell>
           <HeadCell className="hidden sm:table-cell">state</HeadCell>
           <HeadCell className="hidden md:table-cell">begun</HeadCell>
-          <HeadCell>last change</HeadCell>
+          <HeadCell className="hidden sm:table-cell">last change</HeadCell>
           {action !== null && (
             <HeadCell>
               <span className="sr-only">actions</span>
@@ -38,18 +38,20 @@ export function SheetList({ label, sheets, action }: SheetListProps) {
       </thead>
       <tbody>
         {sheets.map((sheet) => (
-          <tr key={sheet.id} className="hover:bg-sheet">
+          <tr key={sheet.id}>
             <Cell className="max-w-0">
-              <Link to={`/sheets/${sheet.id}`} className="block truncate py-1 font-bold hover:underline">
+              <Link to={`/sheets/${sheet.id}`} className="block py-1 font-bold wrap-anywhere hover:underline">
                 {sheet.name}
               </Link>
-              <span className="block text-xs text-faint sm:hidden">{STATE_TEXTS[sheet.state]}</span>
+              <span className="block text-xs text-faint sm:hidden">
+                {STATE_TEXTS[sheet.state]}, <When at={sheet.changedAt} />
+              </span>
             </Cell>
             <Cell className="hidden whitespace-nowrap sm:table-cell">{STATE_TEXTS[sheet.state]}</Cell>
             <Cell className="hidden text-faint md:table-cell">
               <When at={sheet.createdAt} />
             </Cell>
-            <Cell>
+            <Cell className="hidden sm:table-cell">
               <When at={sheet.changedAt} />
             </Cell>
             {action !== null && <Cell className="text-right">{action(sheet)}</Cell>}

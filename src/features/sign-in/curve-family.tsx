@@ -47,32 +47,39 @@ export function CurveFamily() {
           </g>
         );
       })}
-      <path d={path((vds) => slope * (supply - vds), 0.14, supply)} stroke="var(--ink)" />
+      <path d={path((vds) => slope * (supply - vds), supply - 0.09 / slope, supply)} stroke="var(--ink)" />
       <path d={`M${point.x} ${point.y}V${FOOT}`} stroke="var(--ink)" strokeDasharray="3 3" />
       <circle cx={point.x} cy={point.y} r={6} fill="var(--ink)" stroke="var(--sheet)" strokeWidth={2} />
-      <g fill="var(--faint)">
-        <text x={LEFT} y={14} textAnchor="middle">
+      {/* Words break the lines they cross, as a net's name breaks its wire. */}
+      <g stroke="var(--sheet)" strokeWidth={8} style={{ paintOrder: 'stroke' }}>
+        <text x={LEFT} y={14} textAnchor="middle" fill="var(--faint)">
           ID
         </text>
-        <text x={WIDTH - 20} y={FOOT + 22} textAnchor="end">
+        <text x={WIDTH - 20} y={FOOT + 22} textAnchor="end" fill="var(--faint)">
           VDS
         </text>
-        <text x={x(0.425)} y={y(current(0.42, 0.42)) - 6} textAnchor="middle">
+        <text x={x(0.42)} y={y(current(0.42, 0.42)) - 8} textAnchor="middle" fill="var(--faint)">
           knee
         </text>
-        <text x={x(supply) + 8} y={FOOT - 10}>
+        <text x={x(0.8)} y={y(slope * (supply - 0.8)) + 4} textAnchor="middle" fill="var(--faint)">
           load
         </text>
+        <text x={x(0.2)} y={y(current(SHOWN, 0.2)) + 4} textAnchor="middle" fill="var(--triode)" className="font-bold">
+          triode
+        </text>
+        <text
+          x={x(0.88)}
+          y={y(current(SHOWN, 0.88)) + 4}
+          textAnchor="middle"
+          fill="var(--saturated)"
+          className="font-bold"
+        >
+          saturated
+        </text>
+        <text x={point.x + 12} y={point.y - 14} fill="var(--ink)">
+          the still point
+        </text>
       </g>
-      <text x={x(0.1) + 14} y={y(current(SHOWN, 0.1)) + 22} fill="var(--triode)" className="font-bold">
-        triode
-      </text>
-      <text x={x(0.8)} y={y(current(SHOWN, 0.8)) - 10} fill="var(--saturated)" className="font-bold">
-        saturated
-      </text>
-      <text x={point.x + 14} y={point.y + 26} fill="var(--ink)">
-        the still point
-      </text>
     </svg>
   );
 }

@@ -38,7 +38,7 @@ describe.each([
     },
   );
 
-  it.each(['ink', 'focus', 'missed'])('has text in the sheet colour on %s at 4.5 : 1 or more', (ground) => {
+  it.each(['ink', 'faint', 'focus', 'missed'])('has text in the sheet colour on %s at 4.5 : 1 or more', (ground) => {
     expect(contrast(colour('sheet'), colour(ground))).toBeGreaterThanOrEqual(4.5);
   });
 
