@@ -7,10 +7,11 @@ import type { GridPoint } from '#shared/geometry/place';
 import './canvas.css';
 import { CanvasPartsProvider } from './canvas-context';
 import type { CanvasProps } from './canvas-props';
+import type { Desk } from './desk';
 import { asWireId, useFlowElements } from './flow-elements';
 import { HandMarks } from './hand-marks';
-import { type Desk, handleKey, handleKeyUp } from './keyboard';
-import { KeysDialog } from './keys-dialog';
+import { handleKey, handleKeyUp } from './keyboard';
+import { KeysDialog, useKeysDialog } from './keys-dialog';
 import { Marks } from './marks';
 import { NetMarks } from './net-marks';
 import { netSpots } from './net-spots';
@@ -44,10 +45,11 @@ function Board(props: CanvasProps) {
   const { drawing, nets, commands, selection, onSelect, announce, slip, slipPart, frame } = props;
   const { Tag, PartProblem, NetVoltage, useRegion = unknownRegion } = props;
   const [voltages, setVoltages] = useState(true);
-  const [keysShown, setKeysShown] = useState(false);
+  const keys = useKeysDialog();
   const [hovered, setHovered] = useState<string>();
   const board = useRef<HTMLElement>(null);
   const pointer = useRef<GridPoint>(undefined);
+  const selectedAtPress = useRef(selection);
   const view = useView();
   useQuietStrictMode();
 
@@ -119,6 +121,9 @@ function Board(props: CanvasProps) {
     geometry,
     commands,
     selection,
+    get selectedAtPress() {
+      return selectedAtPress.current;
+    },
     moving,
     placing: placingHands,
     wiring: wiringHands,
@@ -148,7 +153,7 @@ function Board(props: CanvasProps) {
       props.onCloseSlip();
       if (slipPart !== undefined) focus(`[data-part="${slipPart}"]`);
     },
-    showKeys: () => setKeysShown(true),
+    showKeys: keys.show,
     announce,
   };
   const latestDesk = useLatest(desk);
@@ -205,6 +210,9 @@ function Board(props: CanvasProps) {
         data-placing={placing !== undefined || undefined}
         onKeyDown={(event) => handleKey(event, desk)}
         onKeyUp={(event) => handleKeyUp(event, desk)}
+        onPointerDownCapture={() => {
+          selectedAtPress.current = selection;
+        }}
         onPointerMove={onPointerMove}
         onPointerLeave={onPointerLeave}
         onClickCapture={onClickCapture}
@@ -239,7 +247,7 @@ function Board(props: CanvasProps) {
         voltages={voltages}
         onVoltages={setVoltages}
         onFit={fit}
-        onKeys={() => setKeysShown(true)}
+        onKeys={keys.show}
         onTake={(kind) => {
           if (placing?.kind === kind) placingHands.end();
           else placingHands.begin(kind, view.middle());
@@ -255,7 +263,7 @@ function Board(props: CanvasProps) {
           focusDrawing();
         }}
       />
-      <KeysDialog open={keysShown} onOpenChange={setKeysShown} />
+      <KeysDialog open={keys.shown} onOpenChange={keys.onOpenChange} />
     </div>
   );
 }
@@ -279,9 +287,9 @@ function hintFor(
 ): string {
   if (placing) {
     const { label } = catalogueEntry(placing.kind);
-    return `${label} at ${placing.place.x}, ${placing.place.y} · click or Enter places · Escape ends`;
+    return `${label} at ${placing.place.x}, ${placing.place.y} · Enter places, Escape ends`;
   }
   const part = wireFrom && geometry.parts.get(wireFrom.part);
   if (!part || !wireFrom) return '';
-  return `wire from ${spokenTerminal(part, wireFrom.pin)} · click a terminal or a wire · Escape drops it`;
+  return `wire from ${spokenTerminal(part, wireFrom.pin)} · Escape drops it`;
 }

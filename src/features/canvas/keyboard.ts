@@ -1,47 +1,15 @@
 import type { KeyboardEvent } from 'react';
 import { CATALOGUE } from '#shared/circuit/catalogue';
-import { type DrawnPart, isComponent, type PartId, type WireEnd } from '#shared/circuit/drawing';
 import { terminalKey } from '#shared/circuit/nets';
-import { GRID, type GridPoint, mirrored, turned } from '#shared/geometry/place';
-import { NOTHING_SELECTED, type Selection } from '../../live/selection';
-import type { SheetCommands } from '../../live/sheet-commands';
+import { GRID } from '#shared/geometry/place';
+import { NOTHING_SELECTED } from '../../live/selection';
+import { ARROWS, type Desk, selectedParts } from './desk';
 import { asPartId } from './flow-elements';
-import { shortPart } from './part-text';
-import { type SheetGeometry, type ShownTerminal, terminalsOf } from './sheet-geometry';
-import { boxOnSheet } from './symbol-box';
-import type { MovingHands } from './use-moving';
-import type { PlacingHands } from './use-placing';
-import type { WiringHands } from './use-wiring';
+import { moveSelected, partKey, walkParts } from './part-keys';
+import { type ShownTerminal, terminalsOf } from './sheet-geometry';
 import { nextInDirection, nextInRing } from './walk';
 
-/** All that the keys act on. */
-export type Desk = {
-  readonly geometry: SheetGeometry;
-  readonly wiresAt: (end: WireEnd) => Selection['wires'];
-  readonly commands: SheetCommands;
-  readonly selection: Selection;
-  readonly placing: PlacingHands;
-  readonly wiring: WiringHands;
-  readonly moving: MovingHands;
-  readonly slipOpen: boolean;
-  select(selection: Selection): void;
-  /** Where a part taken by its letter first appears. */
-  placingStart(): GridPoint;
-  focusPart(part: PartId): void;
-  focusTerminal(end: WireEnd): void;
-  focusDrawing(): void;
-  openSlip(part: PartId): void;
-  closeSlip(): void;
-  showKeys(): void;
-  announce(message: string): void;
-};
-
-const ARROWS: Readonly<Record<string, GridPoint>> = {
-  ArrowUp: { x: 0, y: -1 },
-  ArrowDown: { x: 0, y: 1 },
-  ArrowLeft: { x: -1, y: 0 },
-  ArrowRight: { x: 1, y: 0 },
-};
+/** Grid steps that a part being placed goes with Shift. */
 const SHIFT_STEPS = 5;
 
 /** Whether keys pressed here belong to what is inside, such as a value field. */
@@ -67,11 +35,15 @@ export function handleKeyUp(event: KeyboardEvent, desk: Desk): void {
   if (event.key in ARROWS || event.key === 'Shift') desk.moving.drop();
 }
 
-function handleHistory(event: KeyboardEvent, { commands }: Desk): boolean {
+function handleHistory(event: KeyboardEvent, { commands, announce }: Desk): boolean {
   const key = event.key.toLowerCase();
-  if (key === 'z' && !event.shiftKey) commands.undo();
-  else if (key === 'y' || key === 'z') commands.redo();
-  else return false;
+  if (key === 'z' && !event.shiftKey) {
+    announce(commands.canUndo ? 'Undone.' : 'There is nothing of yours to undo.');
+    commands.undo();
+  } else if (key === 'y' || key === 'z') {
+    announce(commands.canRedo ? 'Redone.' : 'There is nothing to redo.');
+    commands.redo();
+  } else return false;
   return true;
 }
 
@@ -176,84 +148,6 @@ function nextTerminal(
   return nextInRing(terminals, ({ end }) => terminalKey(end) === terminalKey(here.end), key === '.' ? 1 : -1);
 }
 
-function walkParts(arrow: GridPoint, event: KeyboardEvent, desk: Desk): boolean {
-  const parts = [...desk.geometry.parts.values()];
-  const here = currentPart(event, desk);
-  const next = here
-    ? nextInDirection(middleOf(here), arrow, parts, middleOf)
-    : parts.sort((a, b) => a.place.y - b.place.y || a.place.x - b.place.x)[0];
-  const to = next ?? here;
-  if (to) {
-    desk.select({ parts: new Set([to.id]), wires: new Set() });
-    desk.focusPart(to.id);
-  }
-  return true;
-}
-
-function moveSelected(arrow: GridPoint, desk: Desk): boolean {
-  if (!desk.commands.canEdit) return false;
-  const parts = selectedParts(desk);
-  if (parts.length === 0) return false;
-  const by = { x: arrow.x * GRID, y: arrow.y * GRID };
-  desk.moving.show(new Map(parts.map(({ id, place }) => [id, { ...place, x: place.x + by.x, y: place.y + by.y }])));
-  return true;
-}
-
-function partKey(event: KeyboardEvent, desk: Desk): boolean {
-  const { key } = event;
-  const here = currentPart(event, desk);
-  const selected = selectedParts(desk);
-  switch (key) {
-    case 'Enter':
-    case ' ':
-      if (!here) return false;
-      desk.select({ parts: new Set([here.id]), wires: new Set() });
-      desk.openSlip(here.id);
-      return true;
-    case '.':
-    case ',': {
-      const [first] = here ? terminalsOf(desk.geometry, here.id) : [];
-      if (first) desk.focusTerminal(first.end);
-      return first !== undefined;
-    }
-    case '[':
-    case ']':
-    case '=': {
-      if (!desk.commands.canEdit || selected.length === 0) return false;
-      const quarters = key === '[' ? -1 : 1;
-      desk.commands.placeParts(
-        new Map(selected.map(({ id, place }) => [id, key === '=' ? mirrored(place) : turned(place, quarters)])),
-      );
-      const [first] = selected;
-      const what = selected.length === 1 && first ? shortPart(first) : `${selected.length} parts`;
-      desk.announce(`${key === '=' ? 'Mirrored' : 'Turned'} ${what}.`);
-      return true;
-    }
-    case 'Delete':
-    case 'Backspace':
-      return removeSelected(desk, selected);
-    default:
-      return false;
-  }
-}
-
-function removeSelected(desk: Desk, selected: readonly DrawnPart[]): boolean {
-  const { commands, selection } = desk;
-  if (!commands.canEdit || selected.length + selection.wires.size === 0) return false;
-  commands.remove(selection.parts, selection.wires);
-  desk.select(NOTHING_SELECTED);
-  desk.focusDrawing();
-  const named = selected.filter(isComponent).map(({ ref }) => ref);
-  const what =
-    named.length > 0 && named.length === selected.length
-      ? named.join(', ')
-      : selected.length > 0
-        ? 'the parts'
-        : 'the wire';
-  desk.announce(`Removed ${what}. Undo brings it back.`);
-  return true;
-}
-
 /** One thing after another is let go of, the nearest to the hand first. */
 function letGo(event: KeyboardEvent, desk: Desk): boolean {
   if (desk.moving.abort() || desk.wiring.abort()) return true;
@@ -281,22 +175,4 @@ function focusedTerminal({ target }: KeyboardEvent, { geometry }: Desk): ShownTe
   const { nodeid, handleid } = element?.dataset ?? {};
   if (nodeid === undefined || handleid === undefined) return undefined;
   return geometry.terminals.get(terminalKey({ part: asPartId(nodeid), pin: handleid }));
-}
-
-/** The part that has the focus, else the only one that is selected. */
-function currentPart({ target }: KeyboardEvent, desk: Desk): DrawnPart | undefined {
-  const element = target instanceof Element ? target.closest<HTMLElement>('[data-part]') : null;
-  const focused = element?.dataset.part;
-  if (focused !== undefined) return desk.geometry.parts.get(asPartId(focused));
-  const selected = selectedParts(desk);
-  return selected.length === 1 ? selected[0] : undefined;
-}
-
-function selectedParts({ geometry, selection }: Desk): DrawnPart[] {
-  return [...selection.parts].flatMap((id) => geometry.parts.get(id) ?? []);
-}
-
-function middleOf(part: DrawnPart): GridPoint {
-  const { left, top, right, bottom } = boxOnSheet(part.kind, part.place);
-  return { x: (left + right) / 2, y: (top + bottom) / 2 };
 }

@@ -1,18 +1,19 @@
+import { useEffect, useRef, useState } from 'react';
 import { CATALOGUE } from '#shared/circuit/catalogue';
 import { Dialog } from '../../ui/dialog';
 
 const KEYS: readonly (readonly [keys: string, does: string])[] = [
-  ['Arrows', 'go to the next part or terminal, or move what is being placed'],
-  ['Shift + arrows', 'move the selected parts; what is being placed, by 50'],
-  ['Enter', 'open the slip of a part; place; begin a wire at a terminal, tie it'],
-  ['. and ,', 'go through the terminals of a part; of the sheet, with a wire in the hand'],
-  ['[ and ]', 'turn left, turn right'],
+  ['arrows', 'next part or terminal; move what is being placed'],
+  ['Shift arrows', 'move the selected parts'],
+  ['Enter', 'open a part’s slip; place; begin a wire at a terminal, tie it'],
+  ['. ,', 'next and previous terminal'],
+  ['[ ]', 'turn left, turn right'],
   ['=', 'mirror left for right'],
-  ['Delete', 'remove what is selected; at a terminal, the wires that end there'],
-  ['Ctrl + Z', 'undo what you did last'],
-  ['Shift + Ctrl + Z, Ctrl + Y', 'redo it'],
-  ['Escape', 'end placing, drop the wire or the move, close the slip'],
-  ['?', 'show these keys'],
+  ['Delete', 'remove what is selected; at a terminal, its wires'],
+  ['Ctrl Z', 'undo what you did last'],
+  ['Ctrl Y', 'redo it'],
+  ['Escape', 'let go: of the move, the wire, the part, the slip'],
+  ['?', 'these keys'],
 ];
 
 /** The keys that act while the drawing has the focus. */
@@ -24,7 +25,7 @@ export function KeysDialog({ open, onOpenChange }: { open: boolean; onOpenChange
       title="Keys"
       description="They act while the drawing has the focus."
     >
-      <dl className="grid grid-cols-[auto_1fr] gap-x-6 gap-y-1">
+      <dl className="grid grid-cols-[auto_1fr] gap-x-6 gap-y-0.5 text-xs">
         {KEYS.map(([keys, does]) => (
           <Row key={keys} keys={keys} does={does} />
         ))}
@@ -32,6 +33,23 @@ export function KeysDialog({ open, onOpenChange }: { open: boolean; onOpenChange
       </dl>
     </Dialog>
   );
+}
+
+/** The dialog was opened by a key, so it has no button to give the focus back to: it goes to where it was. */
+export function useKeysDialog() {
+  const [shown, setShown] = useState(false);
+  const before = useRef<HTMLElement>(null);
+  useEffect(() => {
+    if (!shown) before.current?.focus({ preventScroll: true });
+  }, [shown]);
+  return {
+    shown,
+    show() {
+      before.current = document.activeElement instanceof HTMLElement ? document.activeElement : null;
+      setShown(true);
+    },
+    onOpenChange: setShown,
+  };
 }
 
 function Row({ keys, does }: { keys: string; does: string }) {

@@ -54,7 +54,7 @@ function OtherMarks({ person, geometry }: { person: OtherPerson; geometry: Sheet
         // Drawn at its own size whatever the zoom, as a pointer is.
         <div className="pointer" style={{ left: pointer.x, top: pointer.y, transform: `scale(${1 / zoom})` }}>
           <svg width="12" height="14" aria-hidden="true">
-            <path d="M.5.5V12L4 9L6.5 13.5L8.5 12.5L6 8H10.5Z" />
+            <path className="pointer-arrow" d="M.5.5V12L4 9L6.5 13.5L8.5 12.5L6 8H10.5Z" />
           </svg>
           <span className="initials">{initials}</span>
         </div>

@@ -53,7 +53,6 @@ export const SheetFlow = memo(function SheetFlow(props: SheetFlowProps) {
       onSelectionDragStart={props.onDragStart}
       onSelectionDragStop={props.onDragStop}
       nodesDraggable={props.draggable}
-      nodeDragThreshold={3}
       snapToGrid
       snapGrid={SNAP_GRID}
       // Every terminal is a source: the mode in which React Flow finds both ends of a wire among those.

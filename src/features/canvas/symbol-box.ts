@@ -10,8 +10,8 @@ export type Anchor = { readonly at: GridPoint; readonly grows: GridPoint };
 
 /** The area of a symbol that can be pressed; its corners lie on the grid, so that snapping it snaps the symbol. */
 const SYMBOL_BOXES: Readonly<Record<SymbolKind, Box>> = {
-  nfet: { left: -40, top: -40, right: 20, bottom: 10 },
-  pfet: { left: -40, top: -10, right: 20, bottom: 40 },
+  nfet: { left: -40, top: -40, right: 10, bottom: 10 },
+  pfet: { left: -40, top: -10, right: 10, bottom: 40 },
   resistor: { left: -20, top: -30, right: 20, bottom: 30 },
   capacitor: { left: -20, top: -20, right: 20, bottom: 20 },
   inductor: { left: -20, top: -30, right: 20, bottom: 30 },

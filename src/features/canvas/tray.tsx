@@ -5,6 +5,7 @@ import { CATALOGUE, type CatalogueEntry } from '#shared/circuit/catalogue';
 import type { DrawnKind } from '#shared/circuit/drawing';
 import type { GridPoint } from '#shared/geometry/place';
 import { SymbolIcon } from './symbols';
+import './tray.css';
 
 type TrayProps = {
   /** Only people who may draw have parts to place. */

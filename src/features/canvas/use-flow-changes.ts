@@ -3,8 +3,8 @@ import type { EdgeChange, NodeChange } from 'reactflow';
 import type { PartId } from '#shared/circuit/drawing';
 import type { Place } from '#shared/geometry/place';
 import type { Selection } from '../../live/selection';
+import type { Desk } from './desk';
 import { asPartId, asWireId } from './flow-elements';
-import type { Desk } from './keyboard';
 import { boxOnSheet } from './symbol-box';
 
 /** React Flow's wishes, each sent where that kind of state lives: selection to the page, drags to the hand. */
@@ -53,10 +53,10 @@ export function useFlowChanges(desk: RefObject<Desk>) {
       },
       /** The first click selects; one on the part already selected opens its slip. */
       onPartClick(id: string, event: MouseEvent) {
-        const { selection, openSlip } = desk.current;
-        const alone = selection.parts.size === 1 && selection.wires.size === 0;
+        const { selectedAtPress, openSlip } = desk.current;
+        const alone = selectedAtPress.parts.size === 1 && selectedAtPress.wires.size === 0;
         const plain = !event.shiftKey && !event.ctrlKey && !event.metaKey;
-        if (plain && alone && selection.parts.has(asPartId(id))) openSlip(asPartId(id));
+        if (plain && alone && selectedAtPress.parts.has(asPartId(id))) openSlip(asPartId(id));
       },
     };
   }, [desk]);

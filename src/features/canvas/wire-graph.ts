@@ -19,8 +19,8 @@ const DOWN = 2;
 const LEFT = 4;
 const UP = 8;
 
-/** Directions into which a net leads from a grid point: along its wires, and along its terminals' leads too. */
-type Directions = { wires: number; all: number };
+/** Directions into which a net leads from a grid point: along its wires, and along the leads of its terminals. */
+type Directions = { wires: number; leads: number };
 
 /**
  * What the wires of each net look like once they lie on the grid together: where they part they make a dot, wherever
@@ -37,7 +37,7 @@ export function wireGraph(drawing: Drawing, geometry: SheetGeometry, { netOf }: 
     const key = keyOf(point);
     let directions = points.get(key);
     if (!directions) {
-      directions = { wires: 0, all: 0 };
+      directions = { wires: 0, leads: 0 };
       points.set(key, directions);
     }
     return directions;
@@ -48,9 +48,7 @@ export function wireGraph(drawing: Drawing, geometry: SheetGeometry, { netOf }: 
     if (net === undefined || !line) continue;
     for (let i = 1; i < line.length; i++) {
       for (const [point, ways] of stretch(line[i - 1] as GridPoint, line[i] as GridPoint)) {
-        const directions = at(net, point);
-        directions.wires |= ways;
-        directions.all |= ways;
+        at(net, point).wires |= ways;
       }
     }
   }
@@ -61,13 +59,13 @@ export function wireGraph(drawing: Drawing, geometry: SheetGeometry, { netOf }: 
     const directions = at(net, point);
     const way = wayOf({ x: -leaves.x, y: -leaves.y });
     if (part.kind === 'net-name') names.push({ part: part.id, directions, way });
-    else directions.all |= way;
+    else directions.leads |= way;
   }
   const namesOnWires = new Set<PartId>();
   for (const { part, directions, way } of names) {
     // A name set on a wire is written into it, so its lead is not drawn and makes no dot.
-    if (count(directions.all) >= 2) namesOnWires.add(part);
-    else directions.all |= way;
+    if (endsAt(directions) >= 2) namesOnWires.add(part);
+    else directions.leads |= way;
   }
 
   const crossed = new Map<string, number>();
@@ -76,13 +74,13 @@ export function wireGraph(drawing: Drawing, geometry: SheetGeometry, { netOf }: 
   const dots = new Map<string, GridPoint>();
   const runsOf = new Map<string, Run[]>();
   for (const [net, points] of nets) {
-    for (const [key, { all }] of points) if (count(all) >= 3) dots.set(key, pointOf(key));
+    for (const [key, here] of points) if (endsAt(here) >= 3) dots.set(key, pointOf(key));
     runsOf.set(net, [...runs(points, crossed, RIGHT), ...runs(points, crossed, DOWN)]);
   }
   for (const { part, at: point, end } of geometry.terminals.values()) {
     if (part.kind !== 'junction') continue;
     const directions = nets.get(netOf.get(terminalKey(end)) ?? '')?.get(keyOf(point));
-    if (!directions || count(directions.all) < 2) dots.set(keyOf(point), point);
+    if (!directions || endsAt(directions) < 2) dots.set(keyOf(point), point);
   }
   return { dots: [...dots.values()], runsOf, namesOnWires };
 }
@@ -92,7 +90,7 @@ function runs(points: ReadonlyMap<string, Directions>, crossed: ReadonlyMap<stri
   const through = upright ? UP | DOWN : LEFT | RIGHT;
   const plain = (key: string) => {
     const here = points.get(key);
-    return here?.wires === through && here.all === through && crossed.get(key) === 1;
+    return here?.wires === through && here.leads === 0 && crossed.get(key) === 1;
   };
   const found: Run[] = [];
   for (const [key, { wires }] of points) {
@@ -124,8 +122,12 @@ function wayOf({ x, y }: GridPoint): number {
   return y < 0 ? UP : 0;
 }
 
-function count(directions: number): number {
-  return [RIGHT, DOWN, LEFT, UP].filter((way) => (directions & way) !== 0).length;
+/** A wire that runs over a lead still ends there. */
+function endsAt({ wires, leads }: Directions): number {
+  return [RIGHT, DOWN, LEFT, UP].reduce(
+    (ends, way) => ends + Number((wires & way) !== 0) + Number((leads & way) !== 0),
+    0,
+  );
 }
 
 function keyOf({ x, y }: GridPoint): string {

@@ -1,0 +1,43 @@
+import type { DrawnPart, PartId, WireEnd } from '#shared/circuit/drawing';
+import type { GridPoint } from '#shared/geometry/place';
+import type { Selection } from '../../live/selection';
+import type { SheetCommands } from '../../live/sheet-commands';
+import type { SheetGeometry } from './sheet-geometry';
+import type { MovingHands } from './use-moving';
+import type { PlacingHands } from './use-placing';
+import type { WiringHands } from './use-wiring';
+
+/** All that keys and clicks act on. */
+export type Desk = {
+  readonly geometry: SheetGeometry;
+  readonly wiresAt: (end: WireEnd) => Selection['wires'];
+  readonly commands: SheetCommands;
+  readonly selection: Selection;
+  /** The selection before the pointer was last pressed, which itself selects. */
+  readonly selectedAtPress: Selection;
+  readonly placing: PlacingHands;
+  readonly wiring: WiringHands;
+  readonly moving: MovingHands;
+  readonly slipOpen: boolean;
+  select(selection: Selection): void;
+  /** Where a part taken by its letter first appears. */
+  placingStart(): GridPoint;
+  focusPart(part: PartId): void;
+  focusTerminal(end: WireEnd): void;
+  focusDrawing(): void;
+  openSlip(part: PartId): void;
+  closeSlip(): void;
+  showKeys(): void;
+  announce(message: string): void;
+};
+
+export const ARROWS: Readonly<Record<string, GridPoint>> = {
+  ArrowUp: { x: 0, y: -1 },
+  ArrowDown: { x: 0, y: 1 },
+  ArrowLeft: { x: -1, y: 0 },
+  ArrowRight: { x: 1, y: 0 },
+};
+
+export function selectedParts({ geometry, selection }: Desk): DrawnPart[] {
+  return [...selection.parts].flatMap((id) => geometry.parts.get(id) ?? []);
+}
