@@ -1,6 +1,6 @@
 import { X } from 'lucide-react';
 import { Dialog as Primitive } from 'radix-ui';
-import type { ReactNode } from 'react';
+import { type ReactNode, useRef } from 'react';
 
 interface DialogProps {
   readonly open: boolean;
@@ -12,6 +12,7 @@ interface DialogProps {
 
 /** A card over the page; Escape, the cross and a click beside it close it, and the focus returns to where it was. */
 export function Dialog({ open, onOpenChange, title, description, children }: DialogProps) {
+  const opener = useRef<Element | null>(null);
   return (
     <Primitive.Root open={open} onOpenChange={onOpenChange}>
       <Primitive.Portal>
@@ -19,16 +20,26 @@ export function Dialog({ open, onOpenChange, title, description, children }: Dia
         <div className="fixed inset-0 z-40 bg-paper/80" />
         <Primitive.Content
           className="fixed top-[12vh] left-1/2 z-50 max-h-[80vh] w-[min(30rem,calc(100vw-2rem))] -translate-x-1/2 overflow-y-auto border border-ink bg-sheet p-6 shadow-slip outline-none"
+          onOpenAutoFocus={() => {
+            opener.current = document.activeElement;
+          }}
+          // The primitive gives the focus back to a trigger of its own only, and ours is wherever the reader was.
+          onCloseAutoFocus={(event) => {
+            event.preventDefault();
+            if (opener.current instanceof HTMLElement) opener.current.focus();
+          }}
           {...(description === undefined ? { 'aria-describedby': undefined } : {})}
         >
-          <div className="mb-4 flex items-start justify-between gap-4">
-            <Primitive.Title className="text-xl">{title}</Primitive.Title>
-            <Primitive.Close className="-mt-1 -mr-2 flex size-8 items-center justify-center" aria-label="Close">
-              <X size={18} strokeWidth={1.5} aria-hidden />
-            </Primitive.Close>
-          </div>
+          <Primitive.Title className="mb-4 pr-8 text-xl">{title}</Primitive.Title>
           {description !== undefined && <Primitive.Description className="mb-4">{description}</Primitive.Description>}
           {children}
+          {/* Last, so that the first field and not the cross takes the focus. */}
+          <Primitive.Close
+            className="absolute top-5 right-4 flex size-8 items-center justify-center"
+            aria-label="Close"
+          >
+            <X size={18} strokeWidth={1.5} aria-hidden />
+          </Primitive.Close>
         </Primitive.Content>
       </Primitive.Portal>
     </Primitive.Root>
