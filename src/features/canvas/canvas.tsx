@@ -5,7 +5,7 @@ import type { DrawnPart, PartId, WireEnd, WireId } from '#shared/circuit/drawing
 import { terminalKey } from '#shared/circuit/nets';
 import type { GridPoint } from '#shared/geometry/place';
 import './canvas.css';
-import { CanvasPartsProvider } from './canvas-context';
+import { type CanvasParts, CanvasPartsProvider } from './canvas-context';
 import type { CanvasProps } from './canvas-props';
 import type { Desk } from './desk';
 import { asWireId, useFlowElements } from './flow-elements';
@@ -78,8 +78,16 @@ function Board(props: CanvasProps) {
   const { wiring, hands: wiringHands } = useWiring(sheet);
 
   const parts = useMemo(
-    () => ({ Tag, PartProblem, useRegion, pressTerminal: wiringHands.press }),
-    [Tag, PartProblem, useRegion, wiringHands],
+    (): CanvasParts => ({
+      Tag,
+      PartProblem,
+      useRegion,
+      // A click on a terminal with a part in the hand sets the part down there; it begins no wire.
+      pressTerminal: (end, event) => {
+        if (!placingHands.now()) wiringHands.press(end, event);
+      },
+    }),
+    [Tag, PartProblem, useRegion, wiringHands, placingHands],
   );
   const graph = useMemo(() => wireGraph(drawing, geometry, nets), [drawing, geometry, nets]);
   const { ground } = drawing.settings;
