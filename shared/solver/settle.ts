@@ -16,6 +16,8 @@ export interface Point {
   /** V by group. */
   readonly x: Float64Array;
   readonly undriven: readonly UndrivenPiece[];
+  /** V that undriven groups are held at, NaN where free. */
+  readonly held: Float64Array;
   readonly surelyUnstable: boolean;
   readonly iterations: number;
 }
@@ -107,15 +109,12 @@ export function settleFrom(equations: Equations, start: Float64Array): Settled {
 }
 
 function judged(equations: Equations, point: Extract<Polished, { kind: 'point' }>, iterations: number): Point {
-  const surelyUnstable = isSurelyUnstable(equations, point.x, point.held);
-  return { kind: 'point', x: point.x, undriven: point.undriven, surelyUnstable, iterations };
+  return { ...point, surelyUnstable: isSurelyUnstable(equations, point.x, point.held), iterations };
 }
 
 /** Where the circuit goes when it is pushed off an unstable point to either side. */
 function leave(equations: Equations, point: Point): Settled[] {
-  const held = new Float64Array(equations.size).fill(Number.NaN);
-  for (const { groups } of point.undriven) held[groups[0] ?? 0] = point.x[groups[0] ?? 0] ?? 0;
-  const direction = growingDirection(equations, point.x, held);
+  const direction = growingDirection(equations, point.x, point.held);
   return [PUSH, -PUSH].map((push) => {
     const x = point.x.map((voltage, i) => voltage + push * (direction[i] ?? 0));
     const result = settleInPseudoTime(equations, x, SEARCH_LEAKAGE);

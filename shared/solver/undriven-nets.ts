@@ -1,6 +1,6 @@
 import { emptyChannel, evaluateChannel } from '../device/channel';
 import type { Equations } from './equations';
-import type { NetworkFet } from './network';
+import type { Network, NetworkFet } from './network';
 
 /** Overdrives within this many volts of zero are at the edge: nothing that is computed from a solution is finer. */
 export const EDGE = 1e-9;
@@ -8,6 +8,8 @@ export const EDGE = 1e-9;
 const FALLING = 0.3;
 /** V, the change of an overdrive that is rounding. */
 const ROUNDING = 1e-12;
+/** V, by which no piece moves any more. */
+const AT_REST = 1e-14;
 const MOST_SWEEPS = 60;
 const MOST_HALVINGS = 200;
 const MOST_DOUBLINGS = 50;
@@ -78,38 +80,48 @@ export function findUndrivenPieces(equations: Equations, coarse: Float64Array, f
  * piece's first group is to be held at.
  */
 export function restUndrivenPieces(equations: Equations, x: Float64Array, pieces: readonly UndrivenPiece[]): void {
+  const { network, netVoltages } = equations;
+  const boundaries = pieces.map(({ groups }) => boundaryOf(network, groups));
   for (let sweep = 0; sweep < MOST_SWEEPS; sweep++) {
     let moved = 0;
-    for (const piece of pieces) {
-      const anchor = piece.groups[0] ?? 0;
-      const from = x[anchor] ?? 0;
-      const to = nearestToZero(equations, x, piece.groups, from);
-      for (const group of piece.groups) x[group] = group === anchor ? to : (x[group] ?? 0) + to - from;
-      moved = Math.max(moved, Math.abs(to - from));
+    equations.spreadVoltages(x);
+    for (const [index, { groups }] of pieces.entries()) {
+      const from = x[groups[0] ?? 0] ?? 0;
+      const shift = nearestToZero(boundaries[index] ?? [], netVoltages, from) - from;
+      for (const group of groups) {
+        x[group] = (x[group] ?? 0) + shift;
+        for (const net of network.groups[group] ?? []) netVoltages[net] = (netVoltages[net] ?? 0) + shift;
+      }
+      moved = Math.max(moved, Math.abs(shift));
     }
-    if (moved <= 1e-14) return;
+    if (moved <= AT_REST) return;
   }
 }
 
-function nearestToZero(equations: Equations, x: Float64Array, groups: readonly number[], from: number): number {
-  const { network } = equations;
-  equations.spreadVoltages(x);
-  const start = equations.netVoltages.slice();
+/** A device between a piece and the rest, with which of its terminals move with the piece. */
+interface BoundaryFet {
+  readonly fet: NetworkFet;
+  readonly moves: { readonly drain: number; readonly gate: number; readonly source: number; readonly body: number };
+}
+
+function boundaryOf(network: Network, groups: readonly number[]): BoundaryFet[] {
   const inside = new Set(groups);
-  const isInside = (net: number): boolean => inside.has(network.groupOf[net] ?? -1);
-  const at = (voltage: number): Float64Array => start.map((v, net) => (isInside(net) ? v + voltage - from : v));
-  const atZero = at(0);
+  const share = (net: number): number => (inside.has(network.groupOf[net] ?? -1) ? 1 : 0);
+  return network.fets.flatMap((fet) => {
+    const moves = { drain: share(fet.drain), gate: share(fet.gate), source: share(fet.source), body: share(fet.body) };
+    return moves.drain === moves.source ? [] : [{ fet, moves }];
+  });
+}
+
+/** The voltage for a piece that is at `from` now, the nets being at `v`. */
+function nearestToZero(boundary: readonly BoundaryFet[], v: Float64Array, from: number): number {
   // Devices that going to 0 would turn on; others stand as they are, and get their own turn if they hold another piece.
-  const restricting = network.fets.filter(
-    (fet) =>
-      isInside(fet.drain) !== isInside(fet.source) &&
-      overdrive(fet, atZero) > Math.max(0, overdrive(fet, start) + ROUNDING),
+  const restricting = boundary.filter(
+    (device) => overdriveAt(device, v, -from) > Math.max(0, overdriveAt(device, v, 0) + ROUNDING),
   );
-  const isOff = (voltage: number): boolean => {
-    const v = at(voltage);
-    return restricting.every((fet) => overdrive(fet, v) <= 0);
-  };
-  if (isOff(0)) return 0;
+  const isOff = (voltage: number): boolean =>
+    restricting.every((device) => overdriveAt(device, v, voltage - from) <= 0);
+  if (restricting.length === 0) return 0;
 
   let off = from;
   let on = 0;
@@ -129,6 +141,18 @@ function nearestToZero(equations: Equations, x: Float64Array, groups: readonly n
 }
 
 const channel = emptyChannel();
+
+function overdriveAt({ fet, moves }: BoundaryFet, v: Float64Array, shift: number): number {
+  evaluateChannel(
+    fet.model,
+    (v[fet.drain] ?? 0) + shift * moves.drain,
+    (v[fet.gate] ?? 0) + shift * moves.gate,
+    (v[fet.source] ?? 0) + shift * moves.source,
+    (v[fet.body] ?? 0) + shift * moves.body,
+    channel,
+  );
+  return channel.law.vov;
+}
 
 function overdrive(fet: NetworkFet, v: Float64Array): number {
   evaluateChannel(fet.model, v[fet.drain] ?? 0, v[fet.gate] ?? 0, v[fet.source] ?? 0, v[fet.body] ?? 0, channel);

@@ -31,7 +31,7 @@ function farthest(a: OperatingPointRecord, b: OperatingPointRecord): number {
   return Math.max(...Object.entries(a.nets).map(([net, voltage]) => Math.abs(voltage - (b.nets[net] ?? Number.NaN))));
 }
 
-describe('circuits wired at random', () => {
+describe('circuits wired at random', { timeout: 120_000 }, () => {
   test('all have an operating point, found cold, at which every current and the power balance', {
     timeout: 120_000,
   }, () => {

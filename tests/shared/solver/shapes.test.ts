@@ -12,7 +12,7 @@ function inverter(index: number, input: string, output: string): CircuitPart[] {
   ];
 }
 
-describe('shapes that are hard to settle', () => {
+describe('shapes that are hard to settle', { timeout: 30_000 }, () => {
   test('a stack of 60 devices with body effect carries one current', () => {
     const parts = Array.from({ length: 60 }, (_, index) =>
       N(`Q${index}`, index === 0 ? 'vdd' : `s${index}`, 'vdd', index === 59 ? 'gnd' : `s${index + 1}`, {
