@@ -21,7 +21,7 @@ export function Menu({ trigger, align = 'end', children }: MenuProps) {
           align={align}
           sideOffset={6}
           collisionPadding={8}
-          className="z-50 max-w-80 min-w-52 border border-ink bg-sheet py-1.5"
+          className="z-50 max-w-[min(20rem,calc(100vw-1rem))] min-w-52 border border-ink bg-sheet py-1.5"
         >
           {children}
         </Primitive.Content>

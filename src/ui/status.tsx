@@ -32,7 +32,8 @@ export function StatusProvider({ children }: { readonly children: ReactNode }) {
   const say = useCallback((text: string) => {
     nextId.current += 1;
     const message = { id: nextId.current, text };
-    setSaid((before) => [...before.slice(-1), message]);
+    // Only the latest: older ones would cover the page they are about.
+    setSaid([message]);
     setTimeout(() => setSaid((before) => before.filter((one) => one !== message)), SHOWN_FOR_MS);
   }, []);
   const warn = useCallback((text: string) => {

@@ -57,7 +57,7 @@ export function TeamSheets({ team, onBegin }: TeamSheetsProps) {
             A sheet holds one drawing that the whole team sees live. Begin with a blank one, a ready-drawn stage or a
             circuit file.
           </p>
-          <Button look="strong" onClick={onBegin}>
+          <Button look="strong" className="max-lg:hidden" onClick={onBegin}>
             New sheet
           </Button>
         </Empty>
