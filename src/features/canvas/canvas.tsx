@@ -190,16 +190,14 @@ function Board(props: CanvasProps) {
   const onClickCapture = (event: MouseEvent) => {
     if (event.target instanceof Element && event.target.closest('[data-own-keys]')) return;
     const at = view.toSheet({ x: event.clientX, y: event.clientY });
-    const ties = wiringHands.takesClick();
+    const meaning = wiringHands.meaningOfClick();
     if (placingHands.now()) {
       placingHands.follow(at);
       placingHands.put();
-    } else if (wiringHands.now()) {
-      if (ties) {
-        wiringHands.follow(at);
-        wiringHands.tie();
-      }
-    } else return;
+    } else if (meaning === 'ties') {
+      wiringHands.follow(at);
+      wiringHands.tie();
+    } else if (meaning === 'not-ours') return;
     event.stopPropagation();
   };
 
@@ -220,6 +218,7 @@ function Board(props: CanvasProps) {
         onKeyUp={(event) => handleKeyUp(event, desk)}
         onPointerDownCapture={() => {
           selectedAtPress.current = selection;
+          wiringHands.newPress();
         }}
         onPointerMove={onPointerMove}
         onPointerLeave={onPointerLeave}

@@ -12,16 +12,16 @@ import { nextInDirection, nextInRing } from './walk';
 /** Grid steps that a part being placed goes with Shift. */
 const SHIFT_STEPS = 5;
 
-/** Whether keys pressed here belong to what is inside, such as a value field. */
-function hasOwnKeys(target: EventTarget): boolean {
-  return (
-    target instanceof Element && target.closest('input, textarea, select, [contenteditable], [data-own-keys]') !== null
-  );
+/** Whether a key pressed here belongs to what is inside: a value field, or a button that it presses. */
+function hasOwnKeys({ target, key }: KeyboardEvent): boolean {
+  if (!(target instanceof Element)) return false;
+  if ((key === 'Enter' || key === ' ') && target.closest('button, a')) return true;
+  return target.closest('input, textarea, select, [contenteditable], [data-own-keys]') !== null;
 }
 
 /** Acts on a key pressed while the drawing has the focus. */
 export function handleKey(event: KeyboardEvent, desk: Desk): void {
-  if (event.defaultPrevented || hasOwnKeys(event.target)) return;
+  if (event.defaultPrevented || hasOwnKeys(event)) return;
   const altGraph = event.getModifierState('AltGraph');
   const acted =
     !altGraph && (event.ctrlKey || event.metaKey)
@@ -65,8 +65,9 @@ function handlePlain(event: KeyboardEvent, desk: Desk): boolean {
   const arrow = ARROWS[key];
   const terminal = focusedTerminal(event, desk);
   if (desk.wiring.now()) return wiringKey(event, desk, terminal);
+  if (arrow && event.shiftKey) return moveSelected(arrow, desk);
   if (terminal) return terminalKeyPressed(event, desk, terminal);
-  if (arrow) return event.shiftKey ? moveSelected(arrow, desk) : walkParts(arrow, event, desk);
+  if (arrow) return walkParts(arrow, event, desk);
   return partKey(event, desk);
 }
 
@@ -134,7 +135,7 @@ function terminalKeyPressed(event: KeyboardEvent, desk: Desk, terminal: ShownTer
     desk.focusTerminal(next.end);
     return true;
   }
-  return event.key in ARROWS;
+  return event.key in ARROWS || partKey(event, desk);
 }
 
 function nextTerminal(

@@ -1,4 +1,4 @@
-import { memo } from 'react';
+import { type MouseEvent, memo } from 'react';
 import ReactFlow, {
   Background,
   BackgroundVariant,
@@ -26,7 +26,7 @@ type SheetFlowProps = {
   /** All stable functions. */
   readonly onNodesChange: (changes: NodeChange[]) => void;
   readonly onEdgesChange: (changes: EdgeChange[]) => void;
-  readonly onPartClick: (id: string, event: React.MouseEvent) => void;
+  readonly onPartClick: (id: string, event: MouseEvent) => void;
   readonly onWireHover: (id: string | undefined) => void;
   readonly onDragStart: () => void;
   readonly onDragStop: () => void;

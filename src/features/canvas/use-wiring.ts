@@ -38,8 +38,10 @@ export type WiringHands = {
   /** Ties the free end to what it points at; without a target it stays in the hand. */
   tie(): void;
   abort(): boolean;
-  /** Whether a click belongs to the wire in the hand; the one that ends the press that began it does nothing. */
-  takesClick(): boolean;
+  /** The pointer goes down anew: clicks are its own from here. */
+  newPress(): void;
+  /** What a click is to the wire in the hand; the one that ends the press that began it ties nothing. */
+  meaningOfClick(): 'ties' | 'nothing' | 'not-ours';
 };
 
 /** A press that moved less than this, in px of the window, was a click. */
@@ -48,7 +50,7 @@ const CLICK_SLOP = 4;
 export function useWiring(sheet: Sheet): { wiring: Wiring | undefined; hands: WiringHands } {
   const [wiring, setWiring] = useState<Wiring>();
   const inHand = useRef<Wiring>(undefined);
-  const pressed = useRef<{ readonly start: GridPoint; ownClick: boolean }>(undefined);
+  const pressed = useRef<GridPoint>(undefined);
   const latest = useLatest(sheet);
 
   const hands = useMemo((): WiringHands => {
@@ -102,7 +104,7 @@ export function useWiring(sheet: Sheet): { wiring: Wiring | undefined; hands: Wi
         // A touch stays with the terminal otherwise, and the drawing would not hear of its way.
         if (event.currentTarget.hasPointerCapture(event.pointerId))
           event.currentTarget.releasePointerCapture(event.pointerId);
-        pressed.current = { start: { x: event.clientX, y: event.clientY }, ownClick: true };
+        pressed.current = { x: event.clientX, y: event.clientY };
         begin(end, true);
       },
       aim(end) {
@@ -118,12 +120,15 @@ export function useWiring(sheet: Sheet): { wiring: Wiring | undefined; hands: Wi
         latest.current.announce('The wire was dropped; nothing has changed.');
         return true;
       },
-      takesClick() {
-        if (pressed.current?.ownClick) {
-          pressed.current.ownClick = false;
-          return false;
+      newPress() {
+        pressed.current = undefined;
+      },
+      meaningOfClick() {
+        if (pressed.current) {
+          pressed.current = undefined;
+          return 'nothing';
         }
-        return inHand.current !== undefined;
+        return inHand.current ? 'ties' : 'not-ours';
       },
     };
   }, [latest]);
@@ -134,7 +139,7 @@ export function useWiring(sheet: Sheet): { wiring: Wiring | undefined; hands: Wi
     const place = (event: PointerEvent) => latest.current.toSheet({ x: event.clientX, y: event.clientY });
     const onMove = (event: PointerEvent) => hands.follow(place(event));
     const onUp = (event: PointerEvent) => {
-      const start = pressed.current?.start ?? { x: 0, y: 0 };
+      const start = pressed.current ?? { x: 0, y: 0 };
       const now = inHand.current;
       if (!now) return;
       if (Math.hypot(event.clientX - start.x, event.clientY - start.y) < CLICK_SLOP) {
@@ -143,8 +148,6 @@ export function useWiring(sheet: Sheet): { wiring: Wiring | undefined; hands: Wi
         setWiring(next);
         return;
       }
-      // A drag ends in no click on the terminal where it began.
-      pressed.current = undefined;
       hands.follow(place(event));
       if (inHand.current?.target) hands.tie();
       else hands.abort();
