@@ -1,6 +1,5 @@
 import { type MouseEvent, type PointerEvent, useCallback, useEffect, useMemo, useRef, useState } from 'react';
 import { ReactFlowProvider, useStoreApi } from 'reactflow';
-import { catalogueEntry } from '#shared/circuit/catalogue';
 import type { DrawnPart, PartId, WireEnd, WireId } from '#shared/circuit/drawing';
 import { terminalKey } from '#shared/circuit/nets';
 import type { GridPoint } from '#shared/geometry/place';
@@ -10,12 +9,13 @@ import type { CanvasProps } from './canvas-props';
 import type { Desk } from './desk';
 import { asWireId, useFlowElements } from './flow-elements';
 import { HandMarks } from './hand-marks';
+import { hintFor } from './hint';
 import { handleKey, handleKeyUp } from './keyboard';
 import { KeysDialog, useKeysDialog } from './keys-dialog';
 import { Marks } from './marks';
 import { NetMarks } from './net-marks';
 import { netSpots } from './net-spots';
-import { spokenPart, spokenTerminal } from './part-text';
+import { spokenPart } from './part-text';
 import { SheetFlow } from './sheet-flow';
 import { layOut, type SheetGeometry } from './sheet-geometry';
 import { SlipOverlay } from './slip-overlay';
@@ -250,7 +250,7 @@ function Board(props: CanvasProps) {
       <Tray
         canEdit={commands.canEdit}
         inHand={placing?.kind}
-        hint={hintFor(placing, wiring?.from, geometry)}
+        hint={hintFor(placing, wiring, geometry)}
         voltages={voltages}
         onVoltages={setVoltages}
         onFit={fit}
@@ -285,18 +285,4 @@ function useQuietStrictMode() {
       },
     }),
   );
-}
-
-function hintFor(
-  placing: { kind: Parameters<typeof catalogueEntry>[0]; place: GridPoint } | undefined,
-  wireFrom: WireEnd | undefined,
-  geometry: SheetGeometry,
-): string {
-  if (placing) {
-    const { label } = catalogueEntry(placing.kind);
-    return `${label} at ${placing.place.x}, ${placing.place.y} · Enter places, Escape ends`;
-  }
-  const part = wireFrom && geometry.parts.get(wireFrom.part);
-  if (!part || !wireFrom) return '';
-  return `wire from ${spokenTerminal(part, wireFrom.pin)} · Escape drops it`;
 }
