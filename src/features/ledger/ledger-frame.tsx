@@ -50,7 +50,7 @@ export function LedgerFrame({
         aria-valuemax={MOST}
         aria-valuenow={collapsed ? LEAST : height}
         tabIndex={0}
-        className="-top-[3px] before:-inset-x-5 before:-inset-y-2.5 absolute left-1/2 z-20 h-[5px] w-6 -translate-x-1/2 cursor-row-resize touch-none border-faint border-y bg-paper before:absolute"
+        className="overflow-visible -top-[3px] before:-inset-x-5 before:-inset-y-2.5 absolute left-1/2 z-20 h-[5px] w-6 -translate-x-1/2 cursor-row-resize touch-none border-faint border-y bg-paper before:absolute"
         onPointerDown={(event) => event.currentTarget.setPointerCapture(event.pointerId)}
         onPointerMove={drag}
         onKeyDown={press}
