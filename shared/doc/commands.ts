@@ -93,12 +93,23 @@ export function placeParts(doc: Y.Doc, places: ReadonlyMap<PartId, Place>): void
   });
 }
 
-/** Sets one value of a part (SI base units), or takes it away with null. */
-export function setValue(doc: Y.Doc, part: DrawnPart, name: string, value: unknown): void {
-  const { parts, params } = sheetMaps(doc);
-  const present = Object.entries(part.values).find(([key]) => key === name)?.[1] ?? null;
-  if (!parts.has(part.id) || equalityDeep(present, value)) return;
-  edit(doc, () => params.set(`${part.id}/${name}`, value));
+/** Values by name, in SI base units; null takes one away. */
+export type ValueChanges = Readonly<Record<string, unknown>>;
+
+/** Sets values of parts, all in one step. Those that are so already are not written again. */
+export function setValues(doc: Y.Doc, changes: ReadonlyMap<PartId, ValueChanges>): void {
+  const { params } = sheetMaps(doc);
+  const writes: [key: string, value: unknown][] = [];
+  for (const part of readDrawing(doc).drawing.parts) {
+    const present = new Map<string, unknown>(Object.entries(part.values));
+    for (const [name, value] of Object.entries(changes.get(part.id) ?? {})) {
+      if (!equalityDeep(present.get(name) ?? null, value)) writes.push([`${part.id}/${name}`, value]);
+    }
+  }
+  if (writes.length === 0) return;
+  edit(doc, () => {
+    for (const [key, value] of writes) params.set(key, value);
+  });
 }
 
 /** Gives a part another reference; refused where another part has it. */

@@ -8,7 +8,8 @@ import {
   remove,
   setReference,
   setTemperature,
-  setValue,
+  setValues,
+  type ValueChanges,
 } from '#shared/doc/commands';
 import type { GridPoint, Place } from '#shared/geometry/place';
 import type { Room } from './room';
@@ -23,6 +24,8 @@ export type SheetCommands = {
   remove(parts: ReadonlySet<PartId>, wires: ReadonlySet<WireId>): void;
   /** SI base units; null takes the value away. */
   setValue(part: DrawnPart, name: string, value: unknown): void;
+  /** Several values of one part, or the same of many, in one step. */
+  setValues(changes: ReadonlyMap<PartId, ValueChanges>): void;
   setReference(part: DrawnPart, ref: string): { ok: true } | { ok: false; reason: string };
   setTemperature(celsius: number): void;
   undo(): void;
@@ -67,7 +70,8 @@ export function useSheetCommands(room: Room, canEdit: boolean): SheetCommands {
       connectToWire: (from, wire, at) => void step(() => connectToWire(doc, from, wire, at, newId)),
       placeParts: (places) => void step(() => placeParts(doc, places)),
       remove: (parts, wires) => void step(() => remove(doc, parts, wires)),
-      setValue: (part, name, value) => void step(() => setValue(doc, part, name, value)),
+      setValue: (part, name, value) => void step(() => setValues(doc, new Map([[part.id, { [name]: value }]]))),
+      setValues: (changes) => void step(() => setValues(doc, changes)),
       setReference: (part, ref) => step(() => setReference(doc, part, ref)) ?? ONLY_LOOKING,
       setTemperature: (celsius) => void step(() => setTemperature(doc, celsius)),
       undo: () => void step(() => undo.undo()),

@@ -98,7 +98,7 @@ export function SheetDesk({ room, state, answer: { sheet, team } }: SheetDeskPro
           <PersonMenu />
         </header>
         <DrawingNotices namesMeet={nets.namesMeet} setAside={setAside} />
-        <main id="main" tabIndex={-1} className="relative min-h-40 flex-1 outline-none">
+        <main id="main" tabIndex={-1} className="relative min-h-40 flex-1 outline-none [container-type:size]">
           <Canvas
             drawing={drawing}
             nets={nets}

@@ -27,11 +27,8 @@ export function FetFields({
   const { canEdit } = commands;
   const { count = 1, process = '', intent, overrides, bodyLedOut = false } = part.values;
   const overridden = Object.keys(overrides ?? {});
-  const chooseSizing = (sizing: string) => {
-    for (const [name, value] of Object.entries(resized(part, sizing as Sizing, settings.processes))) {
-      commands.setValue(part, name, value);
-    }
-  };
+  const chooseSizing = (sizing: string) =>
+    commands.setValues(new Map([[part.id, resized(part, sizing as Sizing, settings.processes)]]));
   const chooseIntent = (region: string) =>
     commands.setValue(part, 'intent', region === '' ? null : { ...intent, region });
 

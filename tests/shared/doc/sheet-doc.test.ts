@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import * as Y from 'yjs';
 import { type DrawnPart, isComponent } from '#shared/circuit/drawing';
-import { addPart, connect, connectToWire, placeParts, remove, setReference, setValue } from '#shared/doc/commands';
+import { addPart, connect, connectToWire, placeParts, remove, setReference, setValues } from '#shared/doc/commands';
 import { readDrawing } from '#shared/doc/read-drawing';
 import { OWN_EDIT, sheetMaps } from '#shared/doc/sheet-maps';
 import { writeDrawing } from '#shared/doc/write-drawing';
@@ -16,6 +16,8 @@ const part = (doc: Y.Doc, id: string): DrawnPart => {
   if (!found) throw new Error(`no part ${id}`);
   return found;
 };
+const setValue = (doc: Y.Doc, { id }: DrawnPart, name: string, value: unknown) =>
+  setValues(doc, new Map([[id, { [name]: value }]]));
 const undoFor = (doc: Y.Doc) =>
   new Y.UndoManager(Object.values(sheetMaps(doc)), { trackedOrigins: new Set([OWN_EDIT]), captureTimeout: 0 });
 function exchange(a: Y.Doc, b: Y.Doc): void {
