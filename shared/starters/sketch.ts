@@ -9,7 +9,7 @@ import {
   type WireEnd,
   wireIdSchema,
 } from '../circuit/drawing';
-import type { GridPoint } from '../geometry/place';
+import type { GridPoint, Turn } from '../geometry/place';
 
 type ComponentKind = DrawnComponent['kind'];
 type ValuesOf<K extends ComponentKind> = Extract<DrawnComponent, { kind: K }>['values'];
@@ -19,9 +19,17 @@ export class Sketch {
   readonly #parts: DrawnPart[] = [];
   readonly #wires: Wire[] = [];
 
-  /** Places a part; returns its terminals by name. `flip` mirrors it left for right. */
-  part<K extends ComponentKind>(kind: K, ref: string, x: number, y: number, values: ValuesOf<K>, flip = false) {
-    const part = this.#add({ kind, ref, place: { x, y, turn: 0, flip }, values }, ref);
+  /** Places a part; returns its terminals by name. `flip` mirrors it left for right, before it is turned. */
+  part<K extends ComponentKind>(
+    kind: K,
+    ref: string,
+    x: number,
+    y: number,
+    values: ValuesOf<K>,
+    flip = false,
+    turn: Turn = 0,
+  ) {
+    const part = this.#add({ kind, ref, place: { x, y, turn, flip }, values }, ref);
     return (pin: string): WireEnd => ({ part: part.id, pin });
   }
 
