@@ -31,6 +31,7 @@ export const CATALOGUE: readonly CatalogueEntry[] = [
   { kind: 'ground', label: 'ground', letter: 'g', initialValues: {} },
   { kind: 'supply', label: 'supply', letter: 'u', initialValues: { net: 'vdd' } },
   { kind: 'net-name', label: 'net name', letter: 't', initialValues: { net: 'net1' } },
+  { kind: 'note', label: 'note', letter: 'x', initialValues: { text: 'note' } },
   { kind: 'junction', label: 'junction', initialValues: {} },
 ];
 

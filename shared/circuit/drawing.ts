@@ -38,6 +38,15 @@ export type WireId = z.infer<typeof wireIdSchema>;
 
 const positive = z.number().positive();
 
+/** The group of parts of one kind whose values are kept equal, by its name: `A`. */
+export const matchSchema = z
+  .string()
+  .regex(/^[A-Z][A-Za-z0-9]{0,7}$/, 'must be a capital letter, then letters or digits');
+const match = { match: matchSchema.optional() };
+
+/** Most characters of a note. */
+export const LONGEST_NOTE = 2000;
+
 /** Sizes in metres, k in A/V²; which of them a device has is checked when the circuit is solved. */
 const fetValuesSchema = z.strictObject({
   width: positive.optional(),
@@ -48,11 +57,12 @@ const fetValuesSchema = z.strictObject({
   overrides: overridesSchema.optional(),
   intent: intentSchema.optional(),
   bodyLedOut: z.boolean().optional(),
+  ...match,
 });
 
 const drawn = { id: partIdSchema, place: placeSchema };
 
-/** A symbol on the sheet. Values are in SI base units; ground, supply, net name and junction are drawing only. */
+/** A symbol on the sheet. Values are in SI base units; ground, supply, net name, junction and note are drawing only. */
 export const drawnPartSchema = z.discriminatedUnion('kind', [
   z.strictObject({ ...drawn, kind: z.literal('nfet'), ref: refSchema, values: fetValuesSchema }),
   z.strictObject({ ...drawn, kind: z.literal('pfet'), ref: refSchema, values: fetValuesSchema }),
@@ -60,36 +70,41 @@ export const drawnPartSchema = z.discriminatedUnion('kind', [
     ...drawn,
     kind: z.literal('resistor'),
     ref: refSchema,
-    values: z.strictObject({ resistance: positive }),
+    values: z.strictObject({ resistance: positive, ...match }),
   }),
   z.strictObject({
     ...drawn,
     kind: z.literal('capacitor'),
     ref: refSchema,
-    values: z.strictObject({ capacitance: positive }),
+    values: z.strictObject({ capacitance: positive, ...match }),
   }),
   z.strictObject({
     ...drawn,
     kind: z.literal('inductor'),
     ref: refSchema,
-    values: z.strictObject({ inductance: positive }),
+    values: z.strictObject({ inductance: positive, ...match }),
   }),
   z.strictObject({
     ...drawn,
     kind: z.literal('voltage'),
     ref: refSchema,
-    values: z.strictObject({ voltage: z.number() }),
+    values: z.strictObject({ voltage: z.number(), ...match }),
   }),
   z.strictObject({
     ...drawn,
     kind: z.literal('current'),
     ref: refSchema,
-    values: z.strictObject({ current: z.number() }),
+    values: z.strictObject({ current: z.number(), ...match }),
   }),
   z.strictObject({ ...drawn, kind: z.literal('ground'), values: z.strictObject({}) }),
   z.strictObject({ ...drawn, kind: z.literal('supply'), values: z.strictObject({ net: netNameSchema }) }),
   z.strictObject({ ...drawn, kind: z.literal('net-name'), values: z.strictObject({ net: netNameSchema }) }),
   z.strictObject({ ...drawn, kind: z.literal('junction'), values: z.strictObject({}) }),
+  z.strictObject({
+    ...drawn,
+    kind: z.literal('note'),
+    values: z.strictObject({ text: z.string().max(LONGEST_NOTE) }),
+  }),
 ]);
 export type DrawnPart = z.infer<typeof drawnPartSchema>;
 export type DrawnKind = DrawnPart['kind'];

@@ -52,7 +52,7 @@ function circuitPart(part: DrawnComponent, nets: DrawnNets): CircuitPart {
       return { ref, kind: 'current', from: net('from'), to: net('to'), current: part.values.current };
     case 'nfet':
     case 'pfet': {
-      const { bodyLedOut, ...values } = part.values;
+      const { bodyLedOut, match: _match, ...values } = part.values;
       const terminals = { drain: net('drain'), gate: net('gate'), source: net('source') };
       return { ref, kind: part.kind, ...terminals, ...(bodyLedOut ? { body: net('body') } : {}), ...values };
     }

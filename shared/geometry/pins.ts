@@ -33,6 +33,7 @@ export const SYMBOL_PINS = {
   supply: { net: { x: 0, y: 0, leaves: DOWN } },
   'net-name': { net: { x: 0, y: 0, leaves: RIGHT } },
   junction: { net: { x: 0, y: 0, leaves: ANY } },
+  note: {},
 } as const satisfies Record<string, Record<string, Pin>>;
 
 export type SymbolKind = keyof typeof SYMBOL_PINS;

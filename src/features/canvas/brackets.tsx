@@ -1,12 +1,12 @@
 import type { DrawnPart } from '#shared/circuit/drawing';
-import { type Box, boxOnSheet } from './symbol-box';
+import { type Box, partBox } from './symbol-box';
 
 const MARGIN = 6;
 const ARM = 8;
 
 /** Corner brackets about a part: they mark it without boxing it in. */
 export function Brackets({ part, look }: { part: DrawnPart; look: 'selected' | 'lit' | 'other' }) {
-  const { left, top, right, bottom } = outset(boxOnSheet(part.kind, part.place));
+  const { left, top, right, bottom } = outset(partBox(part));
   return (
     <path
       className={`brackets brackets-${look}`}

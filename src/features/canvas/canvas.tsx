@@ -19,7 +19,7 @@ import { spokenPart } from './part-text';
 import { SheetFlow } from './sheet-flow';
 import { layOut, type SheetGeometry } from './sheet-geometry';
 import { SlipOverlay } from './slip-overlay';
-import { boxOnSheet } from './symbol-box';
+import { partBox } from './symbol-box';
 import { Tray } from './tray';
 import { useFlowChanges } from './use-flow-changes';
 import { useLatest } from './use-latest';
@@ -118,7 +118,7 @@ function Board(props: CanvasProps) {
   const focusDrawing = () => board.current?.focus({ preventScroll: true });
   const reveal = (id: PartId) => {
     const part = geometry.parts.get(id);
-    if (part) view.reveal(boxOnSheet(part.kind, part.place));
+    if (part) view.reveal(partBox(part));
   };
   const middleOfSelected = (): GridPoint | undefined => {
     const [id] = selection.parts;
@@ -170,7 +170,7 @@ function Board(props: CanvasProps) {
   // biome-ignore lint/correctness/useExhaustiveDependencies: only a new request frames again, not a part that moved
   useEffect(() => {
     const part = frame && geometry.parts.get(frame.part);
-    if (part) view.frame(boxOnSheet(part.kind, part.place));
+    if (part) view.frame(partBox(part));
   }, [frame?.request]);
 
   const fit = useCallback(() => view.fit(latestGeometry.current), [view, latestGeometry]);

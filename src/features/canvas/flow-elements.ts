@@ -14,7 +14,7 @@ import type { GridPoint } from '#shared/geometry/place';
 import type { Selection } from '../../live/selection';
 import { spokenTerminal } from './part-text';
 import type { SheetGeometry } from './sheet-geometry';
-import { boxOnSheet } from './symbol-box';
+import { partBox } from './symbol-box';
 
 export type PartData = {
   readonly part: DrawnPart;
@@ -73,7 +73,7 @@ function sameNode(last: PartNodeType | undefined, next: PartData, selected: bool
     last.data.written === next.written;
   if (unchanged && last.selected === selected) return last;
   const { part } = next;
-  const box = boxOnSheet(part.kind, part.place);
+  const box = partBox(part);
   return {
     id: part.id,
     type: 'part',

@@ -3,7 +3,7 @@ import type { PartId } from '#shared/circuit/drawing';
 import type { OtherPerson } from '../../live/presence';
 import { Brackets, outset } from './brackets';
 import type { SheetGeometry } from './sheet-geometry';
-import { boxOnSheet } from './symbol-box';
+import { partBox } from './symbol-box';
 
 type MarksProps = {
   readonly geometry: SheetGeometry;
@@ -43,7 +43,7 @@ function OtherMarks({ person, geometry }: { person: OtherPerson; geometry: Sheet
       {[...selection].map((id) => {
         const part = geometry.parts.get(id);
         if (!part) return null;
-        const { right, bottom } = outset(boxOnSheet(part.kind, part.place));
+        const { right, bottom } = outset(partBox(part));
         return (
           <div key={id} className="initials" style={{ left: right, top: bottom, transform: 'translate(-100%, -50%)' }}>
             {initials}

@@ -3,7 +3,7 @@ import type { DrawnNets } from '#shared/circuit/nets';
 import type { GridPoint } from '#shared/geometry/place';
 import { nameOf, valueText } from './part-text';
 import type { SheetGeometry } from './sheet-geometry';
-import { type Box, boxOnSheet, hungBox, labelAnchor, overlap, tagAnchor } from './symbol-box';
+import { type Box, hungBox, labelAnchor, overlap, partBox, tagAnchor } from './symbol-box';
 import type { Run, WireGraph } from './wire-graph';
 
 /** Where a net's name and voltage stand on one of its wires, broken for them. */
@@ -66,7 +66,7 @@ function bestSpot(runs: readonly Run[], width: number, taken: readonly Box[]): G
 function obstacles(geometry: SheetGeometry): Box[] {
   const boxes: Box[] = [];
   for (const part of geometry.parts.values()) {
-    if (part.kind !== 'junction') boxes.push(boxOnSheet(part.kind, part.place));
+    if (part.kind !== 'junction') boxes.push(partBox(part));
     const anchor = labelAnchor(part);
     const lines = [nameOf(part), valueText(part)].filter((line) => line !== undefined);
     const longest = Math.max(0, ...lines.map((line) => line.length));

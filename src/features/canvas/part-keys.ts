@@ -6,7 +6,7 @@ import { type Desk, selectedParts } from './desk';
 import { asPartId } from './flow-elements';
 import { shortPart } from './part-text';
 import { terminalsOf } from './sheet-geometry';
-import { boxOnSheet } from './symbol-box';
+import { partBox } from './symbol-box';
 import { nextInDirection } from './walk';
 
 export function walkParts(arrow: GridPoint, event: KeyboardEvent, desk: Desk): boolean {
@@ -97,6 +97,6 @@ function currentPart({ target }: KeyboardEvent, desk: Desk): DrawnPart | undefin
 }
 
 function middleOf(part: DrawnPart): GridPoint {
-  const { left, top, right, bottom } = boxOnSheet(part.kind, part.place);
+  const { left, top, right, bottom } = partBox(part);
   return { x: (left + right) / 2, y: (top + bottom) / 2 };
 }

@@ -1,12 +1,13 @@
 import { type CSSProperties, memo, useEffect } from 'react';
 import { Handle, type NodeProps, Position, useUpdateNodeInternals } from 'reactflow';
 import { bodyLedOut, type DrawnFet, type DrawnPart, isComponent, isFet } from '#shared/circuit/drawing';
+import { noteLines } from '#shared/circuit/note-lines';
 import { type PinPlace, pinPlaces } from '#shared/geometry/pins';
 import type { GridPoint } from '#shared/geometry/place';
 import { useCanvasParts } from './canvas-context';
 import type { PartData } from './flow-elements';
 import { nameOf, spokenPart, spokenTerminal, terminalTitle, valueText } from './part-text';
-import { type Anchor, type Box, boxOnSheet, labelAnchor, tagAnchor, terminalReach } from './symbol-box';
+import { type Anchor, type Box, EMPTY_NOTE, labelAnchor, partBox, tagAnchor, terminalReach } from './symbol-box';
 import { orientation, PartSymbol } from './symbols';
 
 /** A part on the sheet: its symbol, terminals, texts and tag. The outer element that places it is React Flow's. */
@@ -14,7 +15,7 @@ export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps
   const { Tag } = useCanvasParts();
   const { part, depletion, slipOpen, written } = data;
   const { place } = part;
-  const box = boxOnSheet(part.kind, place);
+  const box = partBox(part);
   const pins = pinPlaces(part.kind, place, bodyLedOut(part));
 
   // React Flow measures terminals once and cannot know that they went elsewhere.
@@ -39,9 +40,10 @@ export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps
           {/* Half a pixel aside, so that hairlines fall on whole ones. */}
           <g transform={`translate(${place.x - box.left + 0.5} ${place.y - box.top + 0.5}) ${orientation(place)}`}>
             {isFet(part) && <FetOnSheet part={part} depletion={depletion} />}
-            {!isFet(part) && !written && <PartSymbol kind={part.kind} />}
+            {!isFet(part) && part.kind !== 'note' && !written && <PartSymbol kind={part.kind} />}
           </g>
         </svg>
+        {part.kind === 'note' && <NoteText text={part.values.text} />}
       </div>
       {pins.map((pin) => (
         <Terminal key={pin.pin} part={part} pin={pin} box={box} />
@@ -55,6 +57,11 @@ export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps
     </div>
   );
 });
+
+function NoteText({ text }: { text: string }) {
+  if (text.trim() === '') return <p className="note note-empty">{EMPTY_NOTE}</p>;
+  return <p className="note">{noteLines(text).join('\n')}</p>;
+}
 
 /** Apart, so that a change of region draws the symbol alone. */
 function FetOnSheet({ part, depletion }: { part: DrawnFet; depletion: boolean }) {

@@ -2,7 +2,7 @@ import { type ReactNode, type RefObject, useLayoutEffect, useRef, useState } fro
 import { useStore, useViewport } from 'reactflow';
 import { type DrawnPart, isFet } from '#shared/circuit/drawing';
 import { outset } from './brackets';
-import { type Box, boxOnSheet, labelAnchor, tagAnchor } from './symbol-box';
+import { type Box, labelAnchor, partBox, tagAnchor } from './symbol-box';
 import { useLatest } from './use-latest';
 
 type Size = { readonly width: number; readonly height: number };
@@ -31,7 +31,7 @@ export function SlipOverlay({ part, onFocusLost, children }: SlipOverlayProps) {
       if (element?.contains(document.activeElement)) focusLost.current();
     };
   }, [focusLost]);
-  const box = outset(boxOnSheet(part.kind, part.place));
+  const box = outset(partBox(part));
   const anchor = (isFet(part) ? tagAnchor(part) : labelAnchor(part))?.at ?? part.place;
   const onScreen = {
     left: box.left * zoom + x,

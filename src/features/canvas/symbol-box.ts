@@ -1,6 +1,7 @@
 import { bodyLedOut, type DrawnPart } from '#shared/circuit/drawing';
+import { noteLines } from '#shared/circuit/note-lines';
 import type { SymbolKind } from '#shared/geometry/pins';
-import { type GridPoint, onSheet, orient, type Place } from '#shared/geometry/place';
+import { GRID, type GridPoint, onSheet, orient, type Place } from '#shared/geometry/place';
 
 /** An upright rectangle, in px of the sheet or of a symbol's own drawing. */
 export type Box = { readonly left: number; readonly top: number; readonly right: number; readonly bottom: number };
@@ -21,7 +22,14 @@ const SYMBOL_BOXES: Readonly<Record<SymbolKind, Box>> = {
   supply: { left: -20, top: -30, right: 20, bottom: 0 },
   'net-name': { left: -30, top: -10, right: 0, bottom: 10 },
   junction: { left: -10, top: -10, right: 10, bottom: 10 },
+  note: { left: 0, top: 0, right: 30, bottom: 20 },
 };
+
+/** The room of one character of a note, in px. */
+const CHARACTER: GridPoint = { x: 7.2, y: 16 };
+
+/** What stands in place of a note without text, so that it can be found. */
+export const EMPTY_NOTE = 'note';
 
 /** Across a terminal's pressing area, in px: smaller where a large one would leave nothing of the symbol to take hold of. */
 const TERMINAL_REACH: Partial<Record<SymbolKind, number>> = { capacitor: 18, junction: 10 };
@@ -38,6 +46,20 @@ export function ownBox(kind: SymbolKind): Box {
 export function boxOnSheet(kind: SymbolKind, place: Place): Box {
   const { left, top, right, bottom } = SYMBOL_BOXES[kind];
   return around([onSheet({ x: left, y: top }, place), onSheet({ x: right, y: bottom }, place)]);
+}
+
+/** Where a part lies on the sheet; a note is as large as its text, and upright whatever its turn. */
+export function partBox(part: DrawnPart): Box {
+  const { kind, place } = part;
+  if (kind !== 'note') return boxOnSheet(kind, place);
+  const lines = noteLines(part.values.text);
+  const width = Math.max(...lines.map((line) => line.length), EMPTY_NOTE.length) * CHARACTER.x;
+  const height = lines.length * CHARACTER.y;
+  return { left: place.x, top: place.y, right: place.x + upToGrid(width), bottom: place.y + upToGrid(height) };
+}
+
+function upToGrid(length: number): number {
+  return Math.ceil(length / GRID) * GRID;
 }
 
 export function around(points: readonly GridPoint[]): Box {
@@ -71,6 +93,7 @@ export function labelAnchor(part: DrawnPart): Anchor | undefined {
       return placed(part.place, { x: -16, y: 0 }, { x: -1, y: 0 });
     case 'ground':
     case 'junction':
+    case 'note':
       return undefined;
   }
 }

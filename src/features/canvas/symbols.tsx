@@ -77,6 +77,8 @@ export function PartSymbol({ kind, region, depletion = false, bodyLedOut = false
       );
     case 'junction':
       return null;
+    case 'note':
+      return <path className="lead" d="M0 4H22M0 9H22M0 14H14" />;
   }
 }
 
@@ -102,7 +104,13 @@ export function orientation(place: Pick<Place, 'turn' | 'flip'>): string {
 }
 
 /** How large the tray shows a symbol; the small ones less reduced. */
-const ICON_SCALE: Partial<Record<SymbolKind, number>> = { capacitor: 0.7, ground: 0.9, supply: 0.9, 'net-name': 0.9 };
+const ICON_SCALE: Partial<Record<SymbolKind, number>> = {
+  capacitor: 0.7,
+  ground: 0.9,
+  supply: 0.9,
+  'net-name': 0.9,
+  note: 0.9,
+};
 
 /** A symbol as the tray shows it. */
 export function SymbolIcon({ kind }: { kind: SymbolKind }) {

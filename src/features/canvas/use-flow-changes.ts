@@ -5,7 +5,7 @@ import type { Place } from '#shared/geometry/place';
 import type { Selection } from '../../live/selection';
 import type { Desk } from './desk';
 import { asPartId, asWireId } from './flow-elements';
-import { boxOnSheet } from './symbol-box';
+import { partBox } from './symbol-box';
 
 /** React Flow's wishes, each sent where that kind of state lives: selection to the page, drags to the hand. */
 export function useFlowChanges(desk: RefObject<Desk>) {
@@ -37,7 +37,7 @@ export function useFlowChanges(desk: RefObject<Desk>) {
           if (change.type !== 'position' || !change.dragging || !change.position) continue;
           const part = desk.current.geometry.parts.get(asPartId(change.id));
           if (!part) continue;
-          const { left, top } = boxOnSheet(part.kind, part.place);
+          const { left, top } = partBox(part);
           const { place } = part;
           places.set(part.id, {
             ...place,

@@ -4,7 +4,7 @@ import { isFet } from '#shared/circuit/drawing';
 import type { GridPoint } from '#shared/geometry/place';
 import { TAG_WIDTH } from './net-spots';
 import type { SheetGeometry } from './sheet-geometry';
-import { around, type Box, boxOnSheet, hungBox, tagAnchor } from './symbol-box';
+import { around, type Box, hungBox, partBox, tagAnchor } from './symbol-box';
 
 export const LEAST_ZOOM = 0.2;
 export const MOST_ZOOM = 4;
@@ -81,7 +81,7 @@ export function useView(): View {
 
 function extent(geometry: SheetGeometry): Box | undefined {
   const boxes = [...geometry.parts.values()].flatMap((part) => {
-    const box = boxOnSheet(part.kind, part.place);
+    const box = partBox(part);
     return isFet(part) ? [box, hungBox(tagAnchor(part), TAG_WIDTH, 0)] : [box];
   });
   const corners = boxes.flatMap(({ left, top, right, bottom }) => [
