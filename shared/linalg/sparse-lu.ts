@@ -1,231 +1,193 @@
-import { minimumDegreeOrder } from './minimum-degree';
+import { type Elimination, pivot } from './gilbert-peierls';
+import { analyse, type LuAnalysis } from './lu-analysis';
 import type { SparsePattern } from './sparse-matrix';
 
-/** A diagonal pivot is kept while it is at least this share of the largest in its column. */
-const DIAGONAL_PREFERENCE = 0.1;
+/** A pivot smaller than this share of what stands below it is poor: the rows are then exchanged anew. */
+const LEAST_PIVOT = 1e-3;
 
 /**
- * Left-looking sparse LU with partial pivoting: Gilbert and Peierls, SIAM J. Sci. Stat. Comput. 9, 1988 (from memory).
- * Each column of L and U comes from one sparse triangular solve, whose pattern a depth-first search finds beforehand.
- * Rows are scaled by their largest entry, since nets of microamperes stand beside nets of amperes. One object serves
- * one pattern: `factor` new values, then `solve` as often as wanted.
+ * Numerical sparse LU on a pattern that was analysed beforehand (Davis and Palamadai Natarajan, ACM TOMS Algorithm 907,
+ * 2010). Every factorisation runs through the fixed pattern of the last one; only where a pivot turns out poor is a new
+ * one looked for. A new object begins along the diagonal, so what it computes depends on nothing that was solved before it
+ * was made. Rows are scaled by their largest entry, since nets of microamperes stand beside nets of amperes.
  */
 export class SparseLu {
-  readonly #pattern: SparsePattern;
-  readonly #order: Int32Array;
-  readonly #rowScale: Float64Array;
-  /** Step at which a row became pivot, −1 before. */
-  readonly #stepOfRow: Int32Array;
-  readonly #rowOfStep: Int32Array;
-  readonly #lowerStarts: Int32Array;
-  readonly #upperStarts: Int32Array;
+  readonly #analysis: LuAnalysis;
+  #elimination: Elimination;
+  /** Step of the row of each entry within and above the diagonal blocks. */
+  #innerSteps: Int32Array;
+  #outerSteps: Int32Array;
+  #lowerValues: Float64Array;
+  #upperValues: Float64Array;
+  readonly #outerValues: Float64Array;
   readonly #pivots: Float64Array;
-  /** L below its unit diagonal, by original rows; U above its diagonal, by steps. */
-  #lowerRows: number[] = [];
-  #lowerValues: number[] = [];
-  #upperSteps: number[] = [];
-  #upperValues: number[] = [];
+  /** 1/largest entry, by original row. */
+  readonly #rowScale: Float64Array;
   readonly #work: Float64Array;
-  readonly #mark: Int32Array;
-  readonly #reach: Int32Array;
-  readonly #stack: Int32Array;
-  readonly #stackAt: Int32Array;
 
-  constructor(pattern: SparsePattern) {
-    const { size } = pattern;
-    this.#pattern = pattern;
-    this.#order = minimumDegreeOrder(pattern);
-    this.#rowScale = new Float64Array(size);
-    this.#stepOfRow = new Int32Array(size);
-    this.#rowOfStep = new Int32Array(size);
-    this.#lowerStarts = new Int32Array(size + 1);
-    this.#upperStarts = new Int32Array(size + 1);
-    this.#pivots = new Float64Array(size);
-    this.#work = new Float64Array(size);
-    this.#mark = new Int32Array(size);
-    this.#reach = new Int32Array(size);
-    this.#stack = new Int32Array(size);
-    this.#stackAt = new Int32Array(size);
+  constructor(pattern: SparsePattern, analysis: LuAnalysis = analyse(pattern)) {
+    const { inner, outer, alongDiagonal } = analysis;
+    this.#analysis = analysis;
+    this.#elimination = alongDiagonal;
+    // Along the diagonal steps and places are the same.
+    this.#innerSteps = inner.rows;
+    this.#outerSteps = outer.rows;
+    this.#lowerValues = new Float64Array(alongDiagonal.lower.rows.length);
+    this.#upperValues = new Float64Array(alongDiagonal.upper.rows.length);
+    this.#outerValues = new Float64Array(outer.rows.length);
+    this.#pivots = new Float64Array(pattern.size);
+    this.#rowScale = new Float64Array(pattern.size);
+    this.#work = new Float64Array(pattern.size);
   }
 
   /** Factors values in the pattern's slots. False when a pivot is zero or not finite. */
   factor(values: Float64Array): boolean {
-    const { size } = this.#pattern;
     if (!this.#scaleRows(values)) return false;
-    this.#stepOfRow.fill(-1);
-    this.#mark.fill(-1);
-    this.#lowerRows = [];
-    this.#lowerValues = [];
-    this.#upperSteps = [];
-    this.#upperValues = [];
-    for (let step = 0; step < size; step++) {
-      const column = at(this.#order, step);
-      const top = this.#findReach(column, step);
-      this.#eliminate(column, top, values);
-      if (!this.#choosePivot(column, step, top)) return false;
-    }
-    return true;
+    if (this.#eliminate(values, LEAST_PIVOT)) return true;
+    return this.#pivotAnew(values) && this.#eliminate(values, 0);
   }
 
   /** Solves A·x = b in place. */
   solve(x: Float64Array): void {
-    const { size } = this.#pattern;
+    const { order, blockStarts, outer } = this.#analysis;
+    const { pivotRows, lower, upper } = this.#elimination;
+    const size = order.length;
     const work = this.#work;
-    for (let row = 0; row < size; row++) x[row] = at(x, row) * at(this.#rowScale, row);
+    const pivots = this.#pivots;
+    const scale = this.#rowScale;
     for (let step = 0; step < size; step++) {
-      const value = at(x, at(this.#rowOfStep, step));
-      work[step] = value;
-      if (value === 0) continue;
-      for (let entry = at(this.#lowerStarts, step); entry < at(this.#lowerStarts, step + 1); entry++) {
-        const row = at(this.#lowerRows, entry);
-        x[row] = at(x, row) - at(this.#lowerValues, entry) * value;
+      const row = pivotRows[step] as number;
+      work[step] = (x[row] as number) * (scale[row] as number);
+    }
+    for (let block = blockStarts.length - 2; block >= 0; block--) {
+      const from = blockStarts[block] as number;
+      const to = blockStarts[block + 1] as number;
+      for (let step = from; step < to; step++) {
+        subtractColumn(lower.starts, lower.rows, this.#lowerValues, step, work[step] as number, work);
+      }
+      for (let step = to - 1; step >= from; step--) {
+        const value = (work[step] as number) / (pivots[step] as number);
+        work[step] = value;
+        subtractColumn(upper.starts, upper.rows, this.#upperValues, step, value, work);
+      }
+      for (let step = from; step < to; step++) {
+        subtractColumn(outer.starts, this.#outerSteps, this.#outerValues, step, work[step] as number, work);
       }
     }
-    for (let step = size - 1; step >= 0; step--) {
-      const value = at(work, step) / at(this.#pivots, step);
-      work[step] = value;
-      for (let entry = at(this.#upperStarts, step); entry < at(this.#upperStarts, step + 1); entry++) {
-        const above = at(this.#upperSteps, entry);
-        work[above] = at(work, above) - at(this.#upperValues, entry) * value;
-      }
+    for (let step = 0; step < size; step++) {
+      x[order[step] as number] = work[step] as number;
+      work[step] = 0;
     }
-    for (let step = 0; step < size; step++) x[at(this.#order, step)] = at(work, step);
-    work.fill(0);
   }
 
   /** Sign of the determinant of what was factored; 0 when a scaled pivot is within `doubt` of zero. */
   determinantSign(doubt: number): -1 | 0 | 1 {
-    const { size } = this.#pattern;
-    let sign: -1 | 1 = permutationSign(this.#order) === permutationSign(this.#rowOfStep) ? 1 : -1;
-    for (let step = 0; step < size; step++) {
-      const pivot = at(this.#pivots, step);
-      if (Math.abs(pivot) <= doubt) return 0;
-      if (pivot < 0) sign = sign === 1 ? -1 : 1;
+    let isNegative = this.#elimination.isOdd;
+    for (const value of this.#pivots) {
+      if (Math.abs(value) <= doubt) return 0;
+      if (value < 0) isNegative = !isNegative;
     }
-    return sign;
+    return isNegative ? -1 : 1;
   }
 
   #scaleRows(values: Float64Array): boolean {
-    const { rows } = this.#pattern;
-    const scale = this.#rowScale.fill(0);
+    const { rows } = this.#analysis.pattern;
+    const scale = this.#rowScale;
+    scale.fill(0);
     for (let slot = 0; slot < rows.length; slot++) {
-      const row = at(rows, slot);
-      const size = Math.abs(at(values, slot));
+      const row = rows[slot] as number;
+      const size = Math.abs(values[slot] as number);
       if (!(size <= Number.MAX_VALUE)) return false;
-      if (size > at(scale, row)) scale[row] = size;
+      if (size > (scale[row] as number)) scale[row] = size;
     }
     for (let row = 0; row < scale.length; row++) {
-      if (at(scale, row) < Number.MIN_VALUE * 2 ** 52) return false;
-      scale[row] = 1 / at(scale, row);
+      if ((scale[row] as number) < Number.MIN_VALUE * 2 ** 52) return false;
+      scale[row] = 1 / (scale[row] as number);
     }
     return true;
   }
 
-  /** Rows that this column's triangular solve touches, in topological order, at the end of #reach. */
-  #findReach(column: number, step: number): number {
-    const { size, starts, rows } = this.#pattern;
-    let top = size;
-    for (let slot = at(starts, column); slot < at(starts, column + 1); slot++) {
-      if (at(this.#mark, at(rows, slot)) === step) continue;
-      let depth = 0;
-      this.#push(depth, at(rows, slot), step);
-      while (depth >= 0) {
-        const row = at(this.#stack, depth);
-        const from = at(this.#stepOfRow, row);
-        const end = from < 0 ? 0 : at(this.#lowerStarts, from + 1);
-        let entry = at(this.#stackAt, depth);
-        while (entry < end && at(this.#mark, at(this.#lowerRows, entry)) === step) entry++;
-        if (from < 0 || entry >= end) {
-          this.#reach[--top] = row;
-          depth--;
-        } else {
-          this.#stackAt[depth] = entry + 1;
-          this.#push(++depth, at(this.#lowerRows, entry), step);
-        }
-      }
-    }
-    return top;
-  }
-
-  #push(depth: number, row: number, step: number): void {
-    this.#mark[row] = step;
-    this.#stack[depth] = row;
-    const from = at(this.#stepOfRow, row);
-    this.#stackAt[depth] = from < 0 ? 0 : at(this.#lowerStarts, from);
-  }
-
-  #eliminate(column: number, top: number, values: Float64Array): void {
-    const { size, starts, rows } = this.#pattern;
+  /** The numbers on the present pattern. False, with the work cleared, at a pivot below `least` of what is below it. */
+  #eliminate(values: Float64Array, least: number): boolean {
+    const { inner, outer, pattern } = this.#analysis;
+    const { lower, upper } = this.#elimination;
+    const innerSteps = this.#innerSteps;
+    const lowerValues = this.#lowerValues;
+    const upperValues = this.#upperValues;
+    const outerValues = this.#outerValues;
+    const pivots = this.#pivots;
+    const scale = this.#rowScale;
     const work = this.#work;
-    for (let slot = at(starts, column); slot < at(starts, column + 1); slot++) {
-      const row = at(rows, slot);
-      work[row] = at(values, slot) * at(this.#rowScale, row);
+    const { rows } = pattern;
+    const size = pivots.length;
+    for (let entry = 0; entry < outerValues.length; entry++) {
+      const slot = outer.slots[entry] as number;
+      outerValues[entry] = (values[slot] as number) * (scale[rows[slot] as number] as number);
     }
-    for (let index = top; index < size; index++) {
-      const row = at(this.#reach, index);
-      const from = at(this.#stepOfRow, row);
-      if (from < 0) continue;
-      const value = at(work, row);
-      for (let entry = at(this.#lowerStarts, from); entry < at(this.#lowerStarts, from + 1); entry++) {
-        const below = at(this.#lowerRows, entry);
-        work[below] = at(work, below) - at(this.#lowerValues, entry) * value;
+    for (let step = 0; step < size; step++) {
+      for (let entry = inner.starts[step] as number; entry < (inner.starts[step + 1] as number); entry++) {
+        const slot = inner.slots[entry] as number;
+        work[innerSteps[entry] as number] = (values[slot] as number) * (scale[rows[slot] as number] as number);
+      }
+      for (let entry = upper.starts[step] as number; entry < (upper.starts[step + 1] as number); entry++) {
+        const from = upper.rows[entry] as number;
+        const value = work[from] as number;
+        work[from] = 0;
+        upperValues[entry] = value;
+        subtractColumn(lower.starts, lower.rows, lowerValues, from, value, work);
+      }
+      const pivotValue = work[step] as number;
+      work[step] = 0;
+      let largest = Math.abs(pivotValue);
+      const begin = lower.starts[step] as number;
+      const end = lower.starts[step + 1] as number;
+      for (let entry = begin; entry < end; entry++) {
+        const below = work[lower.rows[entry] as number] as number;
+        if (Math.abs(below) > largest) largest = Math.abs(below);
+        lowerValues[entry] = below / pivotValue;
+        work[lower.rows[entry] as number] = 0;
+      }
+      pivots[step] = pivotValue;
+      if (!(largest > 0 && Math.abs(pivotValue) >= least * largest && largest <= Number.MAX_VALUE)) {
+        work.fill(0);
+        return false;
       }
     }
+    return true;
   }
 
-  #choosePivot(column: number, step: number, top: number): boolean {
-    const { size } = this.#pattern;
-    const work = this.#work;
-    let pivotRow = -1;
-    let largest = 0;
-    for (let index = top; index < size; index++) {
-      const row = at(this.#reach, index);
-      const from = at(this.#stepOfRow, row);
-      if (from >= 0) {
-        this.#upperSteps.push(from);
-        this.#upperValues.push(at(work, row));
-      } else if (Math.abs(at(work, row)) > largest) {
-        largest = Math.abs(at(work, row));
-        pivotRow = row;
-      }
+  #pivotAnew(values: Float64Array): boolean {
+    const { inner, outer, order, pattern } = this.#analysis;
+    const scaled = new Float64Array(inner.slots.length);
+    for (let entry = 0; entry < scaled.length; entry++) {
+      const slot = inner.slots[entry] as number;
+      scaled[entry] = (values[slot] as number) * (this.#rowScale[pattern.rows[slot] as number] as number);
     }
-    const diagonalFree = at(this.#mark, column) === step && at(this.#stepOfRow, column) < 0;
-    if (diagonalFree && Math.abs(at(work, column)) >= DIAGONAL_PREFERENCE * largest) pivotRow = column;
-    if (pivotRow < 0 || !(largest > 0 && largest <= Number.MAX_VALUE)) {
-      work.fill(0);
-      return false;
-    }
-    const pivot = at(work, pivotRow);
-    this.#pivots[step] = pivot;
-    this.#stepOfRow[pivotRow] = step;
-    this.#rowOfStep[step] = pivotRow;
-    for (let index = top; index < size; index++) {
-      const row = at(this.#reach, index);
-      if (at(this.#stepOfRow, row) < 0 && at(work, row) !== 0) {
-        this.#lowerRows.push(row);
-        this.#lowerValues.push(at(work, row) / pivot);
-      }
-      work[row] = 0;
-    }
-    this.#lowerStarts[step + 1] = this.#lowerRows.length;
-    this.#upperStarts[step + 1] = this.#upperSteps.length;
+    const elimination = pivot(inner, scaled, order);
+    if (!elimination) return false;
+    const stepOf = (row: number): number => elimination.stepOfRow[row] as number;
+    this.#elimination = elimination;
+    this.#innerSteps = inner.rows.map(stepOf);
+    this.#outerSteps = outer.rows.map(stepOf);
+    this.#lowerValues = new Float64Array(elimination.lower.rows.length);
+    this.#upperValues = new Float64Array(elimination.upper.rows.length);
     return true;
   }
 }
 
-/** An entry known to be there. */
-function at(list: ArrayLike<number>, index: number): number {
-  return list[index] as number;
-}
-
-function permutationSign(order: Int32Array): -1 | 1 {
-  const seen = new Uint8Array(order.length);
-  let sign: -1 | 1 = 1;
-  for (let start = 0; start < order.length; start++) {
-    for (let next = start, length = 0; !seen[next]; next = at(order, next), length++) {
-      seen[next] = 1;
-      if (length > 0) sign = sign === 1 ? -1 : 1;
-    }
+/** x −= value · (a column). */
+function subtractColumn(
+  starts: Int32Array,
+  rows: Int32Array,
+  values: Float64Array,
+  column: number,
+  value: number,
+  x: Float64Array,
+): void {
+  if (value === 0) return;
+  const end = starts[column + 1] as number;
+  for (let entry = starts[column] as number; entry < end; entry++) {
+    const row = rows[entry] as number;
+    x[row] = (x[row] as number) - (values[entry] as number) * value;
   }
-  return sign;
 }
