@@ -1,3 +1,4 @@
+import type { LoadLine } from '#shared/analyses/load-line';
 import type { OperatingPointRecord } from '#shared/analyses/operating-point-record';
 import type { CircuitFile } from '#shared/circuit/circuit-file';
 import type { Solver } from './solver-client';
@@ -16,6 +17,8 @@ export type SolutionStore = {
   submit(circuit: CircuitFile): void;
   subscribe(listener: () => void): () => void;
   latest(): SolutionOf;
+  /** The load that a FET sees (V, as magnitudes); undefined when the circuit changed before it was known. */
+  loadLine(ref: string, voltages: readonly number[]): Promise<LoadLine | undefined>;
   /** Stops the solver. The next `submit` starts another. */
   close(): void;
 };
@@ -71,6 +74,19 @@ export function createSolutionStore(startSolver: () => Solver): SolutionStore {
       return () => listeners.delete(listener);
     },
     latest: () => latest,
+    async loadLine(ref, voltages) {
+      const asked = solver;
+      if (!asked || running || latest.solution.state !== 'current') return undefined;
+      const { circuit } = latest;
+      try {
+        const line = await asked.loadLine(ref, voltages);
+        return wanted === circuit ? line : undefined;
+      } catch {
+        // A solver that fails here fails the next circuit too, which then starts another.
+        if (solver === asked && !running) stop();
+        return undefined;
+      }
+    },
     close() {
       wanted = undefined;
       stop();
@@ -79,7 +95,7 @@ export function createSolutionStore(startSolver: () => Solver): SolutionStore {
 }
 
 /** The same once another circuit is on the sheet. */
-export function outdated(solution: Solution): Solution {
+function outdated(solution: Solution): Solution {
   switch (solution.state) {
     case 'current':
       return { state: 'outdated', record: solution.record };

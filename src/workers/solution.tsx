@@ -1,26 +1,28 @@
-import { createContext, type ReactNode, useContext, useEffect, useMemo, useState, useSyncExternalStore } from 'react';
+import {
+  createContext,
+  type ReactNode,
+  useContext,
+  useEffect,
+  useLayoutEffect,
+  useState,
+  useSyncExternalStore,
+} from 'react';
 import type { FetPoint, Region } from '#shared/analyses/operating-point-record';
-import { type CircuitFile, isFet } from '#shared/circuit/circuit-file';
+import type { CircuitFile } from '#shared/circuit/circuit-file';
 import type { Problem } from '#shared/circuit/problem';
-import { problemsAbout } from './problems-about';
-import { createSolutionStore, outdated, type Solution } from './solution-store';
+import { NO_FIGURES, type SheetFigures, sheetFigures } from './sheet-figures';
+import { createSolutionStore, type Solution, type SolutionStore } from './solution-store';
 import { type Solver, startSolver } from './solver-client';
-import { vdsScale } from './vds-scale';
 
 export type { Solution } from './solution-store';
 
-type SheetSolution = {
-  readonly solution: Solution;
-  /** The circuit that the solution answers. */
-  readonly circuit: CircuitFile | undefined;
-  /** Where every margin ruler of the sheet ends, in volts. */
-  readonly scaleEnd: number;
-};
+type FigureSource = Pick<SolutionStore, 'subscribe' | 'loadLine'> & { now(): SheetFigures };
 
-const SolutionContext = createContext<SheetSolution>({
-  solution: { state: 'pending' },
-  circuit: undefined,
-  scaleEnd: 1,
+// The context itself never changes: each reader hears of its own figures alone, and the rest of a page is not drawn again.
+const SolutionContext = createContext<FigureSource>({
+  now: () => NO_FIGURES,
+  subscribe: () => () => undefined,
+  loadLine: async () => undefined,
 });
 
 /** Solves the circuit on a thread of its own each time it changes, for everything below. */
@@ -34,64 +36,77 @@ export function SolutionProvider({
   children: ReactNode;
 }) {
   const [store] = useState(() => createSolutionStore(start));
+  const [source] = useState(() => figureSource(store));
   useEffect(() => () => store.close(), [store]);
-  useEffect(() => store.submit(circuit), [store, circuit]);
-  const latest = useSyncExternalStore(store.subscribe, store.latest);
-  const value = useMemo((): SheetSolution => {
-    // The store hears of a new circuit only after this render, which must not show the old figures as its own.
-    const solution = latest.circuit === circuit ? latest.solution : outdated(latest.solution);
-    const scaleEnd = 'record' in solution ? vdsScale(solution.record, marginsAsked(latest.circuit)) : 1;
-    return { solution, circuit: latest.circuit, scaleEnd };
-  }, [latest, circuit]);
-  return <SolutionContext value={value}>{children}</SolutionContext>;
+  // Before the change is painted, so that no old figure is ever shown beside it as its own.
+  useLayoutEffect(() => store.submit(circuit), [store, circuit]);
+  return <SolutionContext value={source}>{children}</SolutionContext>;
 }
 
-function marginsAsked(circuit: CircuitFile | undefined): (ref: string) => number {
-  const asked = new Map(
-    circuit?.parts.filter(isFet).map(({ ref, intent }) => [ref, intent?.region === 'saturated' ? intent.margin : 0]),
-  );
-  return (ref) => asked.get(ref) ?? 0;
+function figureSource(store: SolutionStore): FigureSource {
+  let latest = store.latest();
+  let figures = sheetFigures(latest, NO_FIGURES);
+  return {
+    subscribe: store.subscribe,
+    loadLine: store.loadLine,
+    now() {
+      const next = store.latest();
+      if (next !== latest) {
+        latest = next;
+        figures = sheetFigures(next, figures);
+      }
+      return figures;
+    },
+  };
+}
+
+/** What `pick` finds in the figures. It must give the same object as long as nothing changed. */
+function useFigures<T>(pick: (figures: SheetFigures) => T): T {
+  const source = useContext(SolutionContext);
+  return useSyncExternalStore(source.subscribe, () => pick(source.now()));
 }
 
 export function useSolution(): Solution {
-  return useContext(SolutionContext).solution;
+  return useFigures(({ solution }) => solution);
+}
+
+/** Whether there are figures and whose; changes with every edit, unlike the figures themselves. */
+export function useSolutionState(): Solution['state'] {
+  return useFigures(({ solution }) => solution.state);
 }
 
 /** The circuit that the solution answers; undefined before the first answer. */
 export function useSolvedCircuit(): CircuitFile | undefined {
-  return useContext(SolutionContext).circuit;
+  return useFigures(({ circuit }) => circuit);
 }
 
 /** Where every margin ruler of the sheet ends, in volts. */
 export function useVdsScale(): number {
-  return useContext(SolutionContext).scaleEnd;
+  return useFigures(({ scaleEnd }) => scaleEnd);
 }
 
 /** A FET's figures; undefined while there are none. Whether they are the present circuit's, the solution's state tells. */
 export function useFetPoint(ref: string): FetPoint | undefined {
-  const { solution } = useContext(SolutionContext);
-  if (!('record' in solution) || solution.record.status !== 'solved') return undefined;
-  return Object.hasOwn(solution.record.fets, ref) ? solution.record.fets[ref] : undefined;
+  return useFigures(({ fets }) => fets.get(ref));
 }
 
 export function useFetRegion(ref: string): Region | undefined {
-  return useFetPoint(ref)?.region;
+  return useFigures(({ fets }) => fets.get(ref)?.region);
 }
 
 /** A net's voltage to ground in volts; undefined while there is none. */
 export function useNetVoltage(net: string): number | undefined {
-  const { solution } = useContext(SolutionContext);
-  if (!('record' in solution) || solution.record.status !== 'solved') return undefined;
-  return Object.hasOwn(solution.record.nets, net) ? solution.record.nets[net] : undefined;
+  return useFigures(({ nets }) => nets.get(net));
 }
 
 const NO_PROBLEMS: readonly Problem[] = [];
 
 /** What there is to be told beside a part. */
 export function useProblemsAbout(ref: string): readonly Problem[] {
-  const { solution, circuit } = useContext(SolutionContext);
-  return useMemo(
-    () => ('record' in solution ? problemsAbout(ref, solution.record, circuit) : NO_PROBLEMS),
-    [ref, solution, circuit],
-  );
+  return useFigures(({ problems }) => problems.get(ref) ?? NO_PROBLEMS);
+}
+
+/** Asks for the load that a FET sees in the circuit solved last; see the solver. */
+export function useAskLoadLine(): Solver['loadLine'] {
+  return useContext(SolutionContext).loadLine;
 }

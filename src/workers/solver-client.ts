@@ -1,4 +1,5 @@
 import { wrap } from 'comlink';
+import type { LoadLine } from '#shared/analyses/load-line';
 import type { OperatingPointRecord } from '#shared/analyses/operating-point-record';
 import type { CircuitFile } from '#shared/circuit/circuit-file';
 import type { SolverWorker } from './solver.worker';
@@ -6,6 +7,11 @@ import type { SolverWorker } from './solver.worker';
 /** A solver on its own thread. It answers a circuit at a time; a rejected answer means that it is of no more use. */
 export type Solver = {
   operatingPoint(circuit: CircuitFile): Promise<OperatingPointRecord>;
+  /**
+   * The load that a FET of the circuit solved last sees at `voltages` (V, as magnitudes). Given up, and undefined then, as
+   * soon as anything else is asked for.
+   */
+  loadLine(ref: string, voltages: readonly number[]): Promise<LoadLine | undefined>;
   stop(): void;
 };
 
@@ -24,18 +30,20 @@ export function startSolver(): Solver {
     worker.addEventListener('messageerror', () => reject(new Error('its answer could not be read')));
   });
   dead.catch(() => {});
+  const inTime = async <Answer>(answer: Promise<Answer>): Promise<Answer> => {
+    let timer: ReturnType<typeof setTimeout> | undefined;
+    const late = new Promise<never>((_, reject) => {
+      timer = setTimeout(() => reject(new Error('it took longer than a minute')), LONGEST_SOLVE);
+    });
+    try {
+      return await Promise.race([answer, dead, late]);
+    } finally {
+      clearTimeout(timer);
+    }
+  };
   return {
-    async operatingPoint(circuit) {
-      let timer: ReturnType<typeof setTimeout> | undefined;
-      const late = new Promise<never>((_, reject) => {
-        timer = setTimeout(() => reject(new Error('it took longer than a minute')), LONGEST_SOLVE);
-      });
-      try {
-        return await Promise.race([remote.operatingPoint(circuit), dead, late]);
-      } finally {
-        clearTimeout(timer);
-      }
-    },
+    operatingPoint: (circuit) => inTime(remote.operatingPoint(circuit)),
+    loadLine: (ref, voltages) => inTime<LoadLine | undefined>(remote.loadLine(ref, voltages)),
     stop: () => worker.terminate(),
   };
 }

@@ -1,9 +1,23 @@
+import { loadLine } from '#shared/analyses/load-line';
 import { operatingPoint } from '#shared/analyses/operating-point';
+import type { CircuitFile } from '#shared/circuit/circuit-file';
+import { readCircuit } from '#shared/circuit/read-circuit';
 import type { Solver } from '../../src/workers/solver-client';
 
 /** The real solver, on this thread: jsdom has no workers. */
 export function solverHere(): Solver {
-  return { operatingPoint: async (circuit) => operatingPoint(circuit), stop: () => undefined };
+  let last: CircuitFile | undefined;
+  return {
+    operatingPoint: async (circuit) => {
+      last = circuit;
+      return operatingPoint(circuit);
+    },
+    loadLine: async (ref, voltages) => {
+      const read = readCircuit(last);
+      return read.ok ? loadLine(read.circuit, operatingPoint(last), ref, voltages) : undefined;
+    },
+    stop: () => undefined,
+  };
 }
 
 /** The real solver, which answers its first question and keeps every later one waiting. */
@@ -12,6 +26,7 @@ export function solverThatStalls(): Solver {
   return {
     operatingPoint: (circuit) =>
       asked++ === 0 ? Promise.resolve(operatingPoint(circuit)) : new Promise(() => undefined),
+    loadLine: () => new Promise(() => undefined),
     stop: () => undefined,
   };
 }

@@ -33,6 +33,7 @@ function heldSolvers() {
             die: (why) => reject(new Error(why)),
           });
         }),
+      loadLine: () => new Promise(() => undefined),
       stop: stopped,
     }),
   );
