@@ -1,5 +1,6 @@
 import type { DrawnPart } from '#shared/circuit/drawing';
-import { type Box, partBox } from './symbol-box';
+import type { Box } from '#shared/geometry/box';
+import { partBox } from './symbol-box';
 
 const MARGIN = 6;
 const ARM = 8;

@@ -1,7 +1,6 @@
 import { type MouseEvent, type PointerEvent, useCallback, useEffect, useMemo, useRef, useState } from 'react';
 import { ReactFlowProvider, useStoreApi } from 'reactflow';
-import type { DrawnPart, PartId, WireEnd, WireId } from '#shared/circuit/drawing';
-import { terminalKey } from '#shared/circuit/nets';
+import type { PartId, WireEnd } from '#shared/circuit/drawing';
 import type { GridPoint } from '#shared/geometry/place';
 import './canvas.css';
 import { type CanvasParts, CanvasPartsProvider } from './canvas-context';
@@ -12,12 +11,11 @@ import { HandMarks } from './hand-marks';
 import { hintFor } from './hint';
 import { handleKey, handleKeyUp } from './keyboard';
 import { KeysDialog, useKeysDialog } from './keys-dialog';
+import { litNet } from './lit-net';
 import { Marks } from './marks';
 import { NetMarks } from './net-marks';
-import { netSpots } from './net-spots';
 import { spokenPart } from './part-text';
 import { SheetFlow } from './sheet-flow';
-import { layOut, type SheetGeometry } from './sheet-geometry';
 import { SlipOverlay } from './slip-overlay';
 import { partBox } from './symbol-box';
 import { Tray } from './tray';
@@ -25,10 +23,10 @@ import { useFlowChanges } from './use-flow-changes';
 import { useLatest } from './use-latest';
 import { useMoving } from './use-moving';
 import { usePlacing } from './use-placing';
+import { useSheetPicture } from './use-sheet-picture';
 import { useView } from './use-view';
 import { useWiring } from './use-wiring';
 import { ViewportLayer } from './viewport-layer';
-import { wireGraph } from './wire-graph';
 
 const unknownRegion = () => undefined;
 
@@ -54,12 +52,8 @@ function Board(props: CanvasProps) {
   useQuietStrictMode();
 
   const { elsewhere, hands: moving } = useMoving(drawing, commands, announce);
-  const before = useRef<SheetGeometry>(undefined);
-  const geometry = useMemo(() => {
-    before.current = layOut(drawing, elsewhere, before.current);
-    return before.current;
-  }, [drawing, elsewhere]);
-  const latestGeometry = useLatest(geometry);
+  const { geometry, graph, texts } = useSheetPicture(drawing, nets, elsewhere);
+  const latestPicture = useLatest({ geometry, texts });
 
   const placed = useRef<PartId>(undefined);
   const onPlaced = (part: PartId) => {
@@ -89,28 +83,11 @@ function Board(props: CanvasProps) {
     }),
     [Tag, PartProblem, useRegion, wiringHands, placingHands],
   );
-  const graph = useMemo(() => wireGraph(drawing, geometry, nets), [drawing, geometry, nets]);
-  const { ground } = drawing.settings;
-  const spots = useMemo(
-    () => netSpots(graph, geometry, nets, ground, voltages),
-    [graph, geometry, nets, ground, voltages],
+  const { nodes, edges } = useFlowElements(drawing, geometry, nets, selection, slipPart, texts);
+  const lit = useMemo(
+    () => litNet(hovered === undefined ? undefined : asWireId(hovered), drawing, geometry, nets),
+    [hovered, drawing, geometry, nets],
   );
-  // Where there is no room on the wires for a net's name, the name's own symbol has to show it.
-  const written = useMemo(() => {
-    const shown = new Set(spots.filter(({ named }) => named).map(({ net }) => net));
-    const isShown = (part: DrawnPart | undefined) => part?.kind === 'net-name' && shown.has(part.values.net);
-    return new Set([...graph.namesOnWires].filter((id) => isShown(geometry.parts.get(id))));
-  }, [spots, graph, geometry]);
-  const { nodes, edges } = useFlowElements(drawing, geometry, nets, selection, slipPart, written);
-  const litLines = useMemo(() => {
-    const netOf = (id: WireId) => {
-      const wire = drawing.wires.find((candidate) => candidate.id === id);
-      return wire && nets.netOf.get(terminalKey(wire.from));
-    };
-    const net = hovered === undefined ? undefined : netOf(asWireId(hovered));
-    if (net === undefined) return [];
-    return [...geometry.routes].filter(([id]) => netOf(id) === net).map(([, line]) => line);
-  }, [hovered, drawing, nets, geometry]);
 
   const focus = useCallback((selector: string) => {
     board.current?.querySelector<HTMLElement>(selector)?.focus({ preventScroll: true });
@@ -173,7 +150,10 @@ function Board(props: CanvasProps) {
     if (part) view.frame(partBox(part));
   }, [frame?.request]);
 
-  const fit = useCallback(() => view.fit(latestGeometry.current), [view, latestGeometry]);
+  const fit = useCallback(() => {
+    const { geometry, texts } = latestPicture.current;
+    view.fit(geometry, texts);
+  }, [view, latestPicture]);
 
   const onPointerMove = (event: PointerEvent) => {
     const at = view.toSheet({ x: event.clientX, y: event.clientY });
@@ -236,13 +216,18 @@ function Board(props: CanvasProps) {
             {...changes}
           />
         </CanvasPartsProvider>
-        <NetMarks dots={graph.dots} spots={spots} lit={litLines} voltages={voltages} NetVoltage={NetVoltage} />
+        <NetMarks dots={graph.dots} spots={texts.spots} lit={lit} voltages={voltages} NetVoltage={NetVoltage} />
         <ViewportLayer>
           <Marks geometry={geometry} selected={selection.parts} lit={props.lit} others={props.others} />
           <HandMarks placing={placing} wiring={wiring} geometry={geometry} />
         </ViewportLayer>
         {slip !== undefined && slipOn && (
-          <SlipOverlay key={slipOn.id} part={slipOn} onFocusLost={() => focus(`[data-part="${slipOn.id}"]`)}>
+          <SlipOverlay
+            key={slipOn.id}
+            part={slipOn}
+            beside={(texts.tags.get(slipOn.id) ?? texts.labels.get(slipOn.id))?.grows}
+            onFocusLost={() => focus(`[data-part="${slipOn.id}"]`)}
+          >
             {slip}
           </SlipOverlay>
         )}

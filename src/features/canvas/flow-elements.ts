@@ -10,10 +10,12 @@ import {
   type WireId,
 } from '#shared/circuit/drawing';
 import { type DrawnNets, terminalKey } from '#shared/circuit/nets';
-import type { GridPoint } from '#shared/geometry/place';
+import type { Anchor } from '#shared/geometry/box';
+import { type GridPoint, samePoint } from '#shared/geometry/place';
 import type { Selection } from '../../live/selection';
 import { spokenTerminal } from './part-text';
 import type { SheetGeometry } from './sheet-geometry';
+import type { SheetTexts } from './sheet-texts';
 import { partBox } from './symbol-box';
 
 export type PartData = {
@@ -23,6 +25,9 @@ export type PartData = {
   readonly slipOpen: boolean;
   /** A net name that stands on a wire, where the wire itself shows it. */
   readonly written: boolean;
+  /** Where its label and its tag hang, from the part's own place. */
+  readonly label: Anchor | undefined;
+  readonly tag: Anchor | undefined;
 };
 export type PartNodeType = Node<PartData, 'part'>;
 
@@ -39,7 +44,7 @@ export function useFlowElements(
   { netOf }: DrawnNets,
   selection: Selection,
   slipPart: PartId | undefined,
-  written: ReadonlySet<PartId>,
+  texts: SheetTexts,
 ): { nodes: PartNodeType[]; edges: WireEdgeType[] } {
   const lastNodes = useRef<ReadonlyMap<string, PartNodeType>>(new Map());
   const lastEdges = useRef<ReadonlyMap<string, WireEdgeType>>(new Map());
@@ -49,7 +54,9 @@ export function useFlowElements(
       part,
       depletion: isDepletion(part, drawing.settings),
       slipOpen: part.id === slipPart,
-      written: written.has(part.id),
+      written: texts.written.has(part.id),
+      label: texts.labels.get(part.id),
+      tag: texts.tags.get(part.id),
     };
     return sameNode(lastNodes.current.get(part.id), data, selection.parts.has(part.id));
   });
@@ -70,7 +77,9 @@ function sameNode(last: PartNodeType | undefined, next: PartData, selected: bool
     last.data.part === next.part &&
     last.data.depletion === next.depletion &&
     last.data.slipOpen === next.slipOpen &&
-    last.data.written === next.written;
+    last.data.written === next.written &&
+    sameAnchor(last.data.label, next.label) &&
+    sameAnchor(last.data.tag, next.tag);
   if (unchanged && last.selected === selected) return last;
   const { part } = next;
   const box = partBox(part);
@@ -84,6 +93,11 @@ function sameNode(last: PartNodeType | undefined, next: PartData, selected: bool
     data: unchanged ? last.data : next,
     selected,
   };
+}
+
+function sameAnchor(a: Anchor | undefined, b: Anchor | undefined): boolean {
+  if (a === b) return true;
+  return a !== undefined && b !== undefined && samePoint(a.at, b.at) && samePoint(a.grows, b.grows);
 }
 
 function sameEdge(

@@ -1,14 +1,15 @@
 import { type ComponentType, memo } from 'react';
 import { EdgeLabelRenderer } from 'reactflow';
 import type { GridPoint } from '#shared/geometry/place';
+import type { LitNet } from './lit-net';
 import type { NetSpot } from './net-spots';
 import { pathOf } from './wire-edge';
 
 type NetMarksProps = {
   readonly dots: readonly GridPoint[];
   readonly spots: readonly NetSpot[];
-  /** Routes of the net under the pointer. */
-  readonly lit: readonly (readonly GridPoint[])[];
+  /** The net under the pointer. */
+  readonly lit: LitNet | undefined;
   readonly voltages: boolean;
   readonly NetVoltage: ComponentType<{ net: string }>;
 };
@@ -18,19 +19,29 @@ export const NetMarks = memo(function NetMarks({ dots, spots, lit, voltages, Net
   return (
     <EdgeLabelRenderer>
       <svg className="net-marks" width="1" height="1" aria-hidden="true">
-        {lit.map((line) => (
+        {lit?.lines.map((line) => (
           <path key={pathOf(line)} className="net-lit" d={pathOf(line)} />
+        ))}
+        {lit?.terminals.map(({ x, y }) => (
+          <circle key={`${x} ${y}`} className="net-lit" cx={x + 0.5} cy={y + 0.5} r={4} />
         ))}
         {dots.map(({ x, y }) => (
           <circle key={`${x} ${y}`} className="dot" cx={x + 0.5} cy={y + 0.5} r={3} />
         ))}
       </svg>
-      {spots.map(({ net, named, at }) => (
-        <div key={net} className="net-label" style={{ left: at.x, top: at.y }}>
-          {named && <span className="net-name">{net}</span>}
-          {voltages && <NetVoltage net={net} />}
-        </div>
-      ))}
+      {spots.map(({ net, named, at }) =>
+        named || voltages ? (
+          <div
+            key={net}
+            className="net-label"
+            data-lit={lit?.net === net || undefined}
+            style={{ left: at.x, top: at.y }}
+          >
+            {named && <span className="net-name">{net}</span>}
+            {voltages && <NetVoltage net={net} />}
+          </div>
+        ) : null,
+      )}
     </EdgeLabelRenderer>
   );
 });

@@ -1,85 +1,104 @@
-import { isFet } from '#shared/circuit/drawing';
 import type { DrawnNets } from '#shared/circuit/nets';
-import type { GridPoint } from '#shared/geometry/place';
-import { nameOf, valueText } from './part-text';
-import type { SheetGeometry } from './sheet-geometry';
-import { type Box, hungBox, labelAnchor, overlap, partBox, tagAnchor } from './symbol-box';
+import { type Box, overlap, widened } from '#shared/geometry/box';
+import type { BoxIndex } from '#shared/geometry/box-index';
+import { GRID, type GridPoint } from '#shared/geometry/place';
+import { CHARACTER } from './text-blocks';
 import type { Run, WireGraph } from './wire-graph';
 
 /** Where a net's name and voltage stand on one of its wires, broken for them. */
 export type NetSpot = { readonly net: string; readonly named: boolean; readonly at: GridPoint };
 
-/** Advance of one character at 12 px, as the bundled face has it. */
-const CHARACTER = 7.2;
-const LINE = 16;
-/** Of that, what the letters take above and below the middle. */
-const CAP = 5;
+/** A stretch of a net's wires, and what else may not be written over. */
+export type NetBox = Box & { readonly net: string; readonly upright: boolean };
+
+/** What the letters take above and below the middle of their line, in px. */
+const HALF_LINE = 8;
 /** Characters of a voltage such as `−0.425 V`, the space before it included. */
 const VOLTAGE_CHARACTERS = 8;
-/** A tag with its three lines. */
-export const TAG_WIDTH = 124;
-const TAG_HEIGHT = 58;
+/** Wire that must be seen on either side of the gap, in px: a dot and a little more. */
+const STUB = 8;
+/** Beyond this length a wire is no better a place. */
+const LONG = 240;
 
-/** For each net with a wire long enough, but ground's, the best place for its name: on the longest free stretch. */
+/**
+ * For each net with a free stretch of wire, but ground's, the best place for its name and voltage: clear of what is in
+ * `taken` and of all other wires; if it can be of `wishes` too, where tags would like to stand. Room is kept for
+ * voltages whether they are shown or not, so that showing them moves nothing. `taken` then holds the places.
+ */
 export function netSpots(
   graph: WireGraph,
-  geometry: SheetGeometry,
   { nets }: DrawnNets,
   ground: string,
-  voltages: boolean,
+  wires: BoxIndex<NetBox>,
+  taken: BoxIndex,
+  wishes: readonly Box[],
 ): NetSpot[] {
-  const taken = obstacles(geometry);
   const spots: NetSpot[] = [];
-  for (const [net, runs] of graph.runsOf) {
+  for (const [net, runs] of [...graph.runsOf].sort(([a], [b]) => (a < b ? -1 : 1))) {
+    if (net === ground) continue;
     const named = nets.get(net)?.named ?? false;
-    if (net === ground || (!named && !voltages)) continue;
-    const characters = (named ? net.length : 0) + (voltages ? VOLTAGE_CHARACTERS : 0);
-    const width = characters * CHARACTER + 8;
-    const spot = bestSpot(runs, width, taken);
-    if (!spot) continue;
-    taken.push(boxAbout(spot, width));
-    spots.push({ net, named, at: spot });
+    const width = spotWidth(net, named);
+    let best: GridPoint | undefined;
+    let least = Number.POSITIVE_INFINITY;
+    for (const run of runs) {
+      for (const [at, cost] of places(run, width)) {
+        if (cost >= least) continue;
+        const box = boxAbout(at, width);
+        const wished = cost + 90 * wishes.filter((wish) => overlap(wish, box)).length;
+        if (wished >= least || !taken.isFree(widened(box, 2)) || !clearOfWires(box, net, run, wires)) continue;
+        best = at;
+        least = wished;
+      }
+    }
+    if (!best) continue;
+    taken.add(boxAbout(best, width));
+    spots.push({ net, named, at: best });
   }
   return spots;
 }
 
-function bestSpot(runs: readonly Run[], width: number, taken: readonly Box[]): GridPoint | undefined {
-  const longest = [...runs].sort(
-    (a, b) =>
-      Number(a.upright) - Number(b.upright) || lengthOf(b) - lengthOf(a) || a.from.y - b.from.y || a.from.x - b.from.x,
-  );
-  let crowded: GridPoint | undefined;
-  for (const run of longest) {
-    const needed = run.upright ? LINE + 24 : width + 12;
-    const spare = (lengthOf(run) - needed) / 2;
-    if (spare < 0) continue;
-    const middle = { x: (run.from.x + run.to.x) / 2, y: (run.from.y + run.to.y) / 2 };
-    for (const shift of [0, -spare, spare]) {
-      const at = run.upright ? { x: middle.x, y: middle.y + shift } : { x: middle.x + shift, y: middle.y };
-      if (!taken.some((box) => overlap(box, boxAbout(at, width)))) return at;
-    }
-    if (!run.upright) crowded ??= middle;
-  }
-  return crowded;
+/** The width of a net's name and voltage in px. */
+function spotWidth(net: string, named: boolean): number {
+  return Math.ceil(((named ? net.length : 0) + VOLTAGE_CHARACTERS) * CHARACTER) + 8;
 }
 
-function obstacles(geometry: SheetGeometry): Box[] {
-  const boxes: Box[] = [];
-  for (const part of geometry.parts.values()) {
-    if (part.kind !== 'junction') boxes.push(partBox(part));
-    const anchor = labelAnchor(part);
-    const lines = [nameOf(part), valueText(part)].filter((line) => line !== undefined);
-    const longest = Math.max(0, ...lines.map((line) => line.length));
-    if (anchor) boxes.push(hungBox(anchor, longest * CHARACTER, lines.length * LINE));
-    if (isFet(part)) boxes.push(hungBox(tagAnchor(part), TAG_WIDTH, TAG_HEIGHT));
+/** The room of a spot on the sheet. */
+export function spotBox({ net, named, at }: NetSpot): Box {
+  return boxAbout(at, spotWidth(net, named));
+}
+
+/** Grid points of a run at which a text of this width leaves wire to be seen on either side; the middle first of all. */
+function* places(run: Run, width: number): Generator<[at: GridPoint, cost: number]> {
+  const length = run.to.x - run.from.x + (run.to.y - run.from.y);
+  const needed = (run.upright ? 2 * HALF_LINE : width) + 2 * STUB;
+  if (length < needed) return;
+  const cost = (run.upright ? 60 : 0) + (LONG - Math.min(LONG, length)) / 4;
+  const middle = length / 2;
+  const at = (along: number): GridPoint =>
+    run.upright ? { x: run.from.x, y: run.from.y + along } : { x: run.from.x + along, y: run.from.y };
+  yield [at(Math.round(middle)), cost];
+  for (let aside = GRID; middle - aside >= needed / 2; aside += GRID) {
+    yield [at(Math.round(middle - aside)), cost + 4 + aside / 8];
+    yield [at(Math.round(middle + aside)), cost + 5 + aside / 8];
   }
-  return boxes;
+}
+
+/** Whether no wire but the stretch itself runs through a text. */
+function clearOfWires(box: Box, net: string, run: Run, wires: BoxIndex<NetBox>): boolean {
+  return wires.meeting(widened(box, 2)).every((wire) => {
+    if (wire.net !== net || wire.upright !== run.upright) return false;
+    const across = run.upright ? (wire.left + wire.right) / 2 : (wire.top + wire.bottom) / 2;
+    return across === (run.upright ? run.from.x : run.from.y);
+  });
 }
 
 function boxAbout({ x, y }: GridPoint, width: number): Box {
-  return { left: x - width / 2, top: y - CAP, right: x + width / 2, bottom: y + CAP };
+  return { left: x - width / 2, top: y - HALF_LINE, right: x + width / 2, bottom: y + HALF_LINE };
 }
 
-function lengthOf({ from, to }: Run): number {
-  return to.x - from.x + (to.y - from.y);
+/** Whether a net's name still stands on one of its stretches. */
+export function stillOnWire({ net, at }: NetSpot, graph: WireGraph): boolean {
+  return (graph.runsOf.get(net) ?? []).some(
+    ({ from, to }) => from.x <= at.x && at.x <= to.x && from.y <= at.y && at.y <= to.y,
+  );
 }

@@ -2,18 +2,20 @@ import { type CSSProperties, memo, useEffect } from 'react';
 import { Handle, type NodeProps, Position, useUpdateNodeInternals } from 'reactflow';
 import { bodyLedOut, type DrawnFet, type DrawnPart, isComponent, isFet } from '#shared/circuit/drawing';
 import { noteLines } from '#shared/circuit/note-lines';
+import type { Anchor, Box } from '#shared/geometry/box';
 import { type PinPlace, pinPlaces } from '#shared/geometry/pins';
 import type { GridPoint } from '#shared/geometry/place';
 import { useCanvasParts } from './canvas-context';
 import type { PartData } from './flow-elements';
 import { nameOf, spokenPart, spokenTerminal, terminalTitle, valueText } from './part-text';
-import { type Anchor, type Box, EMPTY_NOTE, labelAnchor, partBox, tagAnchor, terminalReach } from './symbol-box';
+import { onPart } from './sheet-texts';
+import { EMPTY_NOTE, partBox, terminalReach } from './symbol-box';
 import { orientation, PartSymbol } from './symbols';
 
 /** A part on the sheet: its symbol, terminals, texts and tag. The outer element that places it is React Flow's. */
 export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps<PartData>) {
   const { Tag } = useCanvasParts();
-  const { part, depletion, slipOpen, written } = data;
+  const { part, depletion, slipOpen, written, label, tag } = data;
   const { place } = part;
   const box = partBox(part);
   const pins = pinPlaces(part.kind, place, bodyLedOut(part));
@@ -48,9 +50,9 @@ export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps
       {pins.map((pin) => (
         <Terminal key={pin.pin} part={part} pin={pin} box={box} />
       ))}
-      {!written && <PartLabel part={part} box={box} />}
-      {isFet(part) && !slipOpen && (
-        <div className="part-tag" style={hang(tagAnchor(part), box)}>
+      {label && <PartLabel part={part} anchor={onPart(label, part)} box={box} />}
+      {isFet(part) && tag && !slipOpen && (
+        <div className="part-tag" style={hang(onPart(tag, part), box)}>
           <Tag part={part} />
         </div>
       )}
@@ -92,13 +94,14 @@ function Terminal({ part, pin: { pin, at, leaves }, box }: { part: DrawnPart; pi
   );
 }
 
-function PartLabel({ part, box }: { part: DrawnPart; box: Box }) {
+/** Of a text that grows to the left, both ways, to the right. */
+const alignments = ['right', 'center', 'left'] as const;
+
+function PartLabel({ part, anchor, box }: { part: DrawnPart; anchor: Anchor; box: Box }) {
   const { PartProblem } = useCanvasParts();
-  const anchor = labelAnchor(part);
-  if (!anchor) return null;
   const value = valueText(part);
   return (
-    <div className="part-label" style={{ ...hang(anchor, box), textAlign: anchor.grows.x < 0 ? 'right' : 'left' }}>
+    <div className="part-label" style={{ ...hang(anchor, box), textAlign: alignments[anchor.grows.x + 1] }}>
       <div className={isComponent(part) ? 'part-ref' : 'part-net'}>{nameOf(part)}</div>
       {value !== undefined && <div className="part-value">{value}</div>}
       {isComponent(part) && !isFet(part) && <PartProblem part={part} />}

@@ -1,8 +1,10 @@
 import { type ReactNode, type RefObject, useLayoutEffect, useRef, useState } from 'react';
 import { useStore, useViewport } from 'reactflow';
-import { type DrawnPart, isFet } from '#shared/circuit/drawing';
+import type { DrawnPart } from '#shared/circuit/drawing';
+import type { Box } from '#shared/geometry/box';
+import type { GridPoint } from '#shared/geometry/place';
 import { outset } from './brackets';
-import { type Box, labelAnchor, partBox, tagAnchor } from './symbol-box';
+import { partBox } from './symbol-box';
 import { useLatest } from './use-latest';
 
 type Size = { readonly width: number; readonly height: number };
@@ -12,13 +14,15 @@ const GAP = 10;
 
 type SlipOverlayProps = {
   readonly part: DrawnPart;
+  /** On which side of the part its tag or label stands. */
+  readonly beside: GridPoint | undefined;
   /** The slip closed with the focus in it. */
   onFocusLost(): void;
   readonly children: ReactNode;
 };
 
 /** The open slip, at its own size beside its part whatever the zoom, and wholly within the drawing where it fits. */
-export function SlipOverlay({ part, onFocusLost, children }: SlipOverlayProps) {
+export function SlipOverlay({ part, beside, onFocusLost, children }: SlipOverlayProps) {
   const { x, y, zoom } = useViewport();
   const width = useStore((state) => state.width);
   const height = useStore((state) => state.height);
@@ -32,14 +36,13 @@ export function SlipOverlay({ part, onFocusLost, children }: SlipOverlayProps) {
     };
   }, [focusLost]);
   const box = outset(partBox(part));
-  const anchor = (isFet(part) ? tagAnchor(part) : labelAnchor(part))?.at ?? part.place;
   const onScreen = {
     left: box.left * zoom + x,
     top: box.top * zoom + y,
     right: box.right * zoom + x,
     bottom: box.bottom * zoom + y,
   };
-  const toTheRight = anchor.x * 2 >= box.left + box.right;
+  const toTheRight = (beside?.x ?? 0) >= 0;
   const { left, top } = besidePart(onScreen, toTheRight, size, { width, height });
   return (
     // React Flow and the drawing's keys leave alone what happens in here.

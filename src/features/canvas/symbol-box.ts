@@ -1,13 +1,8 @@
-import { bodyLedOut, type DrawnPart } from '#shared/circuit/drawing';
+import type { DrawnPart } from '#shared/circuit/drawing';
 import { noteLines } from '#shared/circuit/note-lines';
+import { around, type Box } from '#shared/geometry/box';
 import type { SymbolKind } from '#shared/geometry/pins';
-import { GRID, type GridPoint, onSheet, orient, type Place } from '#shared/geometry/place';
-
-/** An upright rectangle, in px of the sheet or of a symbol's own drawing. */
-export type Box = { readonly left: number; readonly top: number; readonly right: number; readonly bottom: number };
-
-/** A corner or side at which a block of text hangs, and the direction into which it grows (0: centred). */
-export type Anchor = { readonly at: GridPoint; readonly grows: GridPoint };
+import { GRID, type GridPoint, onSheet, type Place } from '#shared/geometry/place';
 
 /** The area of a symbol that can be pressed; its corners lie on the grid, so that snapping it snaps the symbol. */
 const SYMBOL_BOXES: Readonly<Record<SymbolKind, Box>> = {
@@ -60,59 +55,4 @@ export function partBox(part: DrawnPart): Box {
 
 function upToGrid(length: number): number {
   return Math.ceil(length / GRID) * GRID;
-}
-
-export function around(points: readonly GridPoint[]): Box {
-  const xs = points.map(({ x }) => x);
-  const ys = points.map(({ y }) => y);
-  return { left: Math.min(...xs), top: Math.min(...ys), right: Math.max(...xs), bottom: Math.max(...ys) };
-}
-
-export function overlap(a: Box, b: Box): boolean {
-  return a.left < b.right && b.left < a.right && a.top < b.bottom && b.top < a.bottom;
-}
-
-/** Where a part's reference and value stand: on the gate's side of a FET, right of an upright two-terminal part. */
-export function labelAnchor(part: DrawnPart): Anchor | undefined {
-  switch (part.kind) {
-    case 'nfet':
-      return placed(part.place, { x: -29, y: -6 }, { x: -1, y: -1 });
-    case 'pfet':
-      return placed(part.place, { x: -29, y: 6 }, { x: -1, y: 1 });
-    case 'resistor':
-    case 'inductor':
-      return placed(part.place, { x: 16, y: 0 }, { x: 1, y: 0 });
-    case 'capacitor':
-      return placed(part.place, { x: 20, y: 0 }, { x: 1, y: 0 });
-    case 'voltage':
-    case 'current':
-      return placed(part.place, { x: 26, y: 0 }, { x: 1, y: 0 });
-    case 'supply':
-      return placed(part.place, { x: 0, y: -14 }, { x: 0, y: -1 });
-    case 'net-name':
-      return placed(part.place, { x: -16, y: 0 }, { x: -1, y: 0 });
-    case 'ground':
-    case 'junction':
-    case 'note':
-      return undefined;
-  }
-}
-
-/** Where a FET's tag stands: across the channel from its gate, below a body lead that would run through it. */
-export function tagAnchor(part: DrawnPart): Anchor {
-  const away = bodyLedOut(part) ? 12 : 42;
-  return part.kind === 'pfet'
-    ? placed(part.place, { x: 24, y: away }, { x: 1, y: -1 })
-    : placed(part.place, { x: 24, y: -away }, { x: 1, y: 1 });
-}
-
-/** The box of a block of this size hung at an anchor. */
-export function hungBox({ at, grows }: Anchor, width: number, height: number): Box {
-  const left = at.x + (width * (grows.x - 1)) / 2;
-  const top = at.y + (height * (grows.y - 1)) / 2;
-  return { left, top, right: left + width, bottom: top + height };
-}
-
-function placed(place: Place, at: GridPoint, grows: GridPoint): Anchor {
-  return { at: onSheet(at, place), grows: orient(grows, place) };
 }

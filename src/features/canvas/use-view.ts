@@ -1,10 +1,11 @@
 import { useMemo } from 'react';
 import { useReactFlow, useStoreApi } from 'reactflow';
-import { isFet } from '#shared/circuit/drawing';
+import { around, type Box } from '#shared/geometry/box';
 import type { GridPoint } from '#shared/geometry/place';
-import { TAG_WIDTH } from './net-spots';
 import type { SheetGeometry } from './sheet-geometry';
-import { around, type Box, hungBox, partBox, tagAnchor } from './symbol-box';
+import { type SheetTexts, tagBoxes } from './sheet-texts';
+import { partBox } from './symbol-box';
+import { cornersOf } from './text-blocks';
 
 export const LEAST_ZOOM = 0.2;
 export const MOST_ZOOM = 4;
@@ -14,7 +15,7 @@ const PADDING = 48;
 
 export type View = {
   /** Shows the whole drawing, at most at its own size. */
-  fit(geometry: SheetGeometry): void;
+  fit(geometry: SheetGeometry, texts: SheetTexts): void;
   /** Puts a box in the middle. */
   frame(box: Box): void;
   /** Brings a box into view if it is not. */
@@ -39,9 +40,9 @@ export function useView(): View {
       });
     };
     return {
-      fit(geometry) {
+      fit(geometry, texts) {
         const { width, height } = size();
-        const bounds = extent(geometry);
+        const bounds = extent(geometry, texts);
         if (!bounds) {
           centre({ left: 0, top: 0, right: 0, bottom: 0 }, 1);
           return;
@@ -79,15 +80,8 @@ export function useView(): View {
   }, [flow, store]);
 }
 
-function extent(geometry: SheetGeometry): Box | undefined {
-  const boxes = [...geometry.parts.values()].flatMap((part) => {
-    const box = partBox(part);
-    return isFet(part) ? [box, hungBox(tagAnchor(part), TAG_WIDTH, 0)] : [box];
-  });
-  const corners = boxes.flatMap(({ left, top, right, bottom }) => [
-    { x: left, y: top },
-    { x: right, y: bottom },
-  ]);
+function extent(geometry: SheetGeometry, texts: SheetTexts): Box | undefined {
+  const corners = cornersOf([...[...geometry.parts.values()].map(partBox), ...tagBoxes(texts, geometry)]);
   for (const line of geometry.routes.values()) corners.push(...line);
   return corners.length > 0 ? around(corners) : undefined;
 }

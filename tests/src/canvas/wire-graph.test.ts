@@ -2,8 +2,8 @@ import { expect, test } from 'vitest';
 import type { Drawing } from '#shared/circuit/drawing';
 import { findNets } from '#shared/circuit/nets';
 import { STARTERS } from '#shared/starters/starters';
-import { netSpots } from '../../../src/features/canvas/net-spots';
 import { layOut } from '../../../src/features/canvas/sheet-geometry';
+import { placeTexts } from '../../../src/features/canvas/sheet-texts';
 import { wireGraph } from '../../../src/features/canvas/wire-graph';
 import { drawingWith, drawn, wired } from '../../support/draw';
 
@@ -52,17 +52,13 @@ test('wires of two nets that cross make no dot, and neither net is named across 
 
 test.each(STARTERS)('$id: every name set on a wire is written into a stretch of its own net', ({ drawing }) => {
   const { nets, geometry, graph } = graphOf(drawing);
-  const spots = netSpots(graph, geometry, nets, drawing.settings.ground, true);
+  const { spots } = placeTexts(drawing, geometry, graph, nets);
   expect(spots.map(({ net }) => net)).not.toContain(drawing.settings.ground);
   for (const { net, at } of spots) {
     const on = (graph.runsOf.get(net) ?? []).some(
       ({ from, to }) => from.x <= at.x && at.x <= to.x && from.y <= at.y && at.y <= to.y,
     );
     expect(on, `${net} at ${at.x}, ${at.y}`).toBe(true);
-  }
-  for (const id of graph.namesOnWires) {
-    const part = geometry.parts.get(id);
-    expect(part?.kind === 'net-name' && spots.some(({ net }) => net === part.values.net)).toBe(true);
   }
 });
 
