@@ -1,14 +1,16 @@
+import { memo } from 'react';
 import type { FetPoint } from '#shared/analyses/operating-point-record';
 import { standingOf } from '#shared/analyses/verdict';
 import type { DrawnFet } from '#shared/circuit/drawing';
 import type { Problem } from '#shared/circuit/problem';
 import { formatValue } from '#shared/units/format-value';
+import { dimmed } from '../../formats/dimmed';
 import { MarginRuler } from '../../formats/margin-ruler';
 import { isVerdict } from '../../formats/problem-words';
 import { REGION_COLOUR, RegionGlyph } from '../../formats/region-glyph';
 import { standingWords } from '../../formats/standing-words';
 import { VerdictOutline } from '../../formats/verdict-outline';
-import { useFetPoint, useProblemsAbout, useSolution, useVdsScale } from '../../workers/solution';
+import { useFetPoint, useProblemsAbout, useSolutionState, useVdsScale } from '../../workers/solution';
 import { ProblemNote, RemarkMark } from './problem-note';
 
 /** Width of the ruler in px; the tag is 8 px wider on either side. */
@@ -16,34 +18,36 @@ const RULER = 104;
 
 /** The annotation beside a FET: region, current and margin ruler, or why there is none. */
 export function FetTag({ part }: { part: DrawnFet }) {
-  const { state } = useSolution();
+  const state = useSolutionState();
   const point = useFetPoint(part.ref);
-  const problems = useProblemsAbout(part.ref).filter((problem) => !isVerdict(problem));
+  const problems = useProblemsAbout(part.ref);
   const busy = state === 'outdated' || state === 'pending';
   return (
     <figure
       aria-label={`${part.ref} at the operating point`}
       aria-busy={busy}
-      className={`relative isolate w-30 px-2 pt-1.5 pb-1 text-xs transition-opacity ${busy ? 'opacity-45' : ''}`}
+      className={`relative isolate w-30 px-2 pt-1.5 pb-1 text-xs ${dimmed(busy)}`}
     >
       {point ? (
         <Figures point={point} intent={part.values.intent} problems={problems} />
       ) : (
-        <NoFigures working={busy} problems={problems} />
+        <NoFigures working={busy} problems={problems.filter((problem) => !isVerdict(problem))} />
       )}
     </figure>
   );
 }
 
-function Figures({
+/** Drawn again only when something in it changed: an edit dims every tag, and most then come back as they were. */
+const Figures = memo(function Figures({
   point,
   intent,
-  problems,
+  problems: all,
 }: {
   point: FetPoint;
   intent: DrawnFet['values']['intent'];
   problems: readonly Problem[];
 }) {
+  const problems = all.filter((problem) => !isVerdict(problem));
   const scaleEnd = useVdsScale();
   const standing = intent && standingOf(point, intent);
   const words = standing && standingWords(standing);
@@ -66,7 +70,7 @@ function Figures({
       {words && <p className="sr-only">{`${words.verdict} ${words.by}`}</p>}
     </>
   );
-}
+});
 
 function NoFigures({ working, problems }: { working: boolean; problems: readonly Problem[] }) {
   const errors = problems.filter(({ severity }) => severity === 'error');
