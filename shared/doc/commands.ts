@@ -13,9 +13,12 @@ import {
   wireIdSchema,
 } from '../circuit/drawing';
 import type { GridPoint, Place } from '../geometry/place';
+import { sharedByGroups } from './match';
 import { nextReference } from './next-reference';
 import { readDrawing } from './read-drawing';
+import { renameInSpread } from './renumber';
 import { edit, sheetMaps } from './sheet-maps';
+import { type ValueChanges, writeValues } from './write-values';
 
 /** Gives ids that nobody else gives; letters, digits, `_` and `-`. */
 export type IdSource = () => string;
@@ -93,23 +96,10 @@ export function placeParts(doc: Y.Doc, places: ReadonlyMap<PartId, Place>): void
   });
 }
 
-/** Values by name, in SI base units; null takes one away. */
-export type ValueChanges = Readonly<Record<string, unknown>>;
-
-/** Sets values of parts, all in one step. Those that are so already are not written again. */
+/** Sets values of parts, all in one step, and of whatever is matched with them. Those that are so already are not written again. */
 export function setValues(doc: Y.Doc, changes: ReadonlyMap<PartId, ValueChanges>): void {
-  const { params } = sheetMaps(doc);
-  const writes: [key: string, value: unknown][] = [];
-  for (const part of readDrawing(doc).drawing.parts) {
-    const present = new Map<string, unknown>(Object.entries(part.values));
-    for (const [name, value] of Object.entries(changes.get(part.id) ?? {})) {
-      if (!equalityDeep(present.get(name) ?? null, value)) writes.push([`${part.id}/${name}`, value]);
-    }
-  }
-  if (writes.length === 0) return;
-  edit(doc, () => {
-    for (const [key, value] of writes) params.set(key, value);
-  });
+  const { parts } = readDrawing(doc).drawing;
+  edit(doc, () => writeValues(doc, parts, sharedByGroups(parts, changes)));
 }
 
 /** Gives a part another reference; refused where another part has it. */
@@ -117,7 +107,10 @@ export function setReference(doc: Y.Doc, part: DrawnPart, ref: string): { ok: tr
   if (!isComponent(part) || part.ref === ref) return { ok: true };
   if (referencesIn(doc).has(ref))
     return { ok: false, reason: `${ref} is taken: choose another, or rename that part first.` };
-  edit(doc, () => sheetMaps(doc).params.set(`${part.id}/ref`, ref));
+  edit(doc, () => {
+    sheetMaps(doc).params.set(`${part.id}/ref`, ref);
+    renameInSpread(doc, new Map([[part.ref, ref]]));
+  });
   return { ok: true };
 }
 

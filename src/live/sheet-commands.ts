@@ -1,4 +1,5 @@
 import { useCallback, useMemo, useSyncExternalStore } from 'react';
+import type { Clip } from '#shared/circuit/clip';
 import type { DrawnKind, DrawnPart, PartId, Wire, WireEnd, WireId } from '#shared/circuit/drawing';
 import {
   addPart,
@@ -9,8 +10,12 @@ import {
   setReference,
   setTemperature,
   setValues,
-  type ValueChanges,
 } from '#shared/doc/commands';
+import { type Inserted, insertClip } from '#shared/doc/insert-clip';
+import { equalise, type Matched, matchParts, unmatchParts } from '#shared/doc/match';
+import { type ReadingOrder, renumber } from '#shared/doc/renumber';
+import type { ValueChanges } from '#shared/doc/write-values';
+import type { Carry } from '#shared/geometry/carry';
 import type { GridPoint, Place } from '#shared/geometry/place';
 import type { Room } from './room';
 
@@ -28,6 +33,14 @@ export type SheetCommands = {
   setValues(changes: ReadonlyMap<PartId, ValueChanges>): void;
   setReference(part: DrawnPart, ref: string): { ok: true } | { ok: false; reason: string };
   setTemperature(celsius: number): void;
+  insertClip(clip: Clip, carry: Carry): Inserted;
+  /** Of the parts given, or of all; how many have another reference now. */
+  renumber(order: ReadingOrder, parts?: ReadonlySet<PartId>): number;
+  /** Keeps the values of parts of one kind equal, as a new group or in the one of that name. */
+  matchParts(parts: ReadonlySet<PartId>, name?: string): Matched | undefined;
+  unmatchParts(parts: ReadonlySet<PartId>): void;
+  /** Gives a part's values to the rest of its group. */
+  equalise(part: PartId): void;
   undo(): void;
   redo(): void;
   readonly canUndo: boolean;
@@ -74,6 +87,11 @@ export function useSheetCommands(room: Room, canEdit: boolean): SheetCommands {
       setValues: (changes) => void step(() => setValues(doc, changes)),
       setReference: (part, ref) => step(() => setReference(doc, part, ref)) ?? ONLY_LOOKING,
       setTemperature: (celsius) => void step(() => setTemperature(doc, celsius)),
+      insertClip: (clip, carry) => step(() => insertClip(doc, clip, carry, newId)) ?? ONLY_LOOKING,
+      renumber: (order, parts) => step(() => renumber(doc, order, parts)) ?? 0,
+      matchParts: (parts, name) => step(() => matchParts(doc, parts, name)),
+      unmatchParts: (parts) => void step(() => unmatchParts(doc, parts)),
+      equalise: (part) => void step(() => equalise(doc, part)),
       undo: () => void step(() => undo.undo()),
       redo: () => void step(() => undo.redo()),
     };
