@@ -3,7 +3,9 @@ import { regionSchema } from '#shared/circuit/circuit-file';
 import type { DrawnFet, SheetSettings } from '#shared/circuit/drawing';
 import { formatExact } from '#shared/units/format-value';
 import type { SheetCommands } from '../../live/sheet-commands';
+import { EditedValue } from './editing';
 import { ChosenField, ShownValue, TypedField } from './fields';
+import { isDepletion } from './parameters';
 import { readCount, readMargin } from './read-fields';
 import { resized, type Sizing, sizingOf } from './sizing';
 
@@ -25,8 +27,7 @@ export function FetFields({
   commands: SheetCommands;
 }) {
   const { canEdit } = commands;
-  const { count = 1, process = '', intent, overrides, bodyLedOut = false } = part.values;
-  const overridden = Object.keys(overrides ?? {});
+  const { count = 1, process = '', intent, bodyLedOut = false } = part.values;
   const chooseSizing = (sizing: string) =>
     commands.setValues(new Map([[part.id, resized(part, sizing as Sizing, settings.processes)]]));
   const chooseIntent = (region: string) =>
@@ -35,6 +36,7 @@ export function FetFields({
   return (
     <>
       <ChosenField
+        name="k"
         label="sized by"
         value={sizingOf(part)}
         options={SIZINGS}
@@ -42,6 +44,7 @@ export function FetFields({
         canEdit={canEdit}
       />
       <TypedField
+        name="count"
         label="count"
         value={count}
         show={String}
@@ -50,6 +53,7 @@ export function FetFields({
         canEdit={canEdit}
       />
       <ChosenField
+        name="process"
         label="process"
         value={process}
         options={processChoices(process, settings.processes)}
@@ -57,13 +61,14 @@ export function FetFields({
         canEdit={canEdit}
         note={isInvented(process) ? 'invented figures' : undefined}
       />
-      {overridden.length > 0 && <ShownValue label="own">{overridden.join(', ')}</ShownValue>}
+      {isDepletion(part, settings.processes) && <ShownValue label="channel">depletion</ShownValue>}
       <BodyField
         ledOut={bodyLedOut}
         canEdit={canEdit}
         onChange={(ledOut) => commands.setValue(part, 'bodyLedOut', ledOut ? true : null)}
       />
       <ChosenField
+        name="intent"
         label="intent"
         value={intent?.region ?? ''}
         options={REGIONS}
@@ -72,6 +77,7 @@ export function FetFields({
       />
       {intent && (
         <TypedField
+          name="margin"
           label="margin"
           value={intent.margin ?? 0}
           show={(volts) => formatExact(volts, 'V')}
@@ -106,7 +112,7 @@ function BodyField({
 }) {
   if (!canEdit) return <ShownValue label="body">{ledOut ? 'led out' : 'tied to the source'}</ShownValue>;
   return (
-    <>
+    <EditedValue name="bodyLedOut">
       <span className="text-faint">body</span>
       <label className="flex items-center gap-2 py-0.5">
         <input
@@ -118,6 +124,6 @@ function BodyField({
         />
         led out
       </label>
-    </>
+    </EditedValue>
   );
 }

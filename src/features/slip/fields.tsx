@@ -1,19 +1,23 @@
 import { type ReactNode, type Ref, useId } from 'react';
 import { type Committed, type Read, ValueField } from '../../ui/value-field';
+import { EditedValue } from './editing';
 
-/** Two columns: what a value is called, and the value. */
+/** What a value is called, the value, and over its end who else is at it. */
 export function FieldGrid({ children }: { children: ReactNode }) {
-  return <div className="grid grid-cols-[4.5rem_minmax(0,1fr)] items-baseline gap-x-3 gap-y-1.5">{children}</div>;
+  return <div className="grid grid-cols-[5rem_minmax(0,1fr)_0] items-baseline gap-y-1.5">{children}</div>;
 }
 
 /** A value to be typed, or for those who only look, its text. */
 export function TypedField<T>({
+  name,
   label,
   value,
   show,
   canEdit,
   ...rest
 }: {
+  /** Of the value in the part. */
+  name: string;
   label: string;
   value: T;
   show: (value: T) => string;
@@ -23,11 +27,16 @@ export function TypedField<T>({
   inputRef?: Ref<HTMLInputElement>;
 }) {
   if (!canEdit) return <ShownValue label={label}>{show(value)}</ShownValue>;
-  return <ValueField label={label} value={value} show={show} {...rest} />;
+  return (
+    <EditedValue name={name}>
+      <ValueField label={label} value={value} show={show} {...rest} />
+    </EditedValue>
+  );
 }
 
 /** A value chosen from a few. An empty value stands for none. */
 export function ChosenField({
+  name,
   label,
   value,
   options,
@@ -35,6 +44,8 @@ export function ChosenField({
   canEdit,
   note,
 }: {
+  /** Of the value in the part. */
+  name: string;
   label: string;
   value: string;
   options: readonly { readonly value: string; readonly text: string }[];
@@ -47,7 +58,7 @@ export function ChosenField({
   const text = options.find((option) => option.value === value)?.text ?? value;
   if (!canEdit) return <ShownValue label={label}>{note === undefined ? text : `${text}, ${note}`}</ShownValue>;
   return (
-    <>
+    <EditedValue name={name}>
       <label htmlFor={id} className="text-faint">
         {label}
       </label>
@@ -71,7 +82,7 @@ export function ChosenField({
           </span>
         )}
       </span>
-    </>
+    </EditedValue>
   );
 }
 
@@ -79,7 +90,7 @@ export function ShownValue({ label, children }: { label: string; children: React
   return (
     <>
       <span className="text-faint">{label}</span>
-      <span>{children}</span>
+      <span className="col-span-2">{children}</span>
     </>
   );
 }

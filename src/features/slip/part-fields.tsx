@@ -28,6 +28,7 @@ export function PartFields({
       <FieldGrid>
         {part.kind === 'supply' || part.kind === 'net-name' ? (
           <TypedField
+            name="net"
             label="net"
             value={part.values.net}
             show={(name) => name}
@@ -49,6 +50,7 @@ export function PartFields({
       {valueFields(part).map(({ name, label, quantity }, index) => (
         <TypedField
           key={name}
+          name={name}
           label={label}
           value={values[name]}
           show={(value) => shown(value, quantity)}
