@@ -8,13 +8,17 @@ import type { Config } from './config';
 import { openDatabase } from './db/connect';
 import { migrateDatabase } from './db/migrate';
 import { touchSession } from './db/queries/sessions';
-import { appendUpdates, compactUpdates, loadUpdates } from './db/queries/sheet-log';
+import { appendUpdates, compactUpdates, endOfLog, loadUpdates } from './db/queries/sheet-log';
+import { findSheet } from './db/queries/sheets';
 import { createSessionAdapter } from './db/session-adapter';
 import { prepareDemo } from './demo/prepare';
 import { createAdmit, isLive } from './services/admit';
 import type { Context } from './services/context';
 import { createEvents } from './services/events';
 import { keepHouse } from './services/housekeeping';
+import { createListNews } from './services/list-news';
+import { createStandings } from './services/standings';
+import { tellTeam } from './services/tell-team';
 import type { OpenLog } from './sync/log';
 import { Rooms } from './sync/rooms';
 import { acceptSync } from './sync/upgrade';
@@ -71,13 +75,24 @@ export async function startServer(config: Config, replaced: Replacements = {}): 
   const touch = (sessionId: string) => touchSession(db, sessionId, now());
   const admit = createAdmit(db, now);
   const sessions = createSessions({ adapter: createSessionAdapter(db, hashToken), touch, secure: tls, now });
+  const events = createEvents((sessionId) => isLive(db, sessionId, now()));
+  const listNews = createListNews({
+    teamOf: (sheetId) => findSheet(db, sheetId)?.teamId,
+    tell: (teamId) => tellTeam({ db, events }, teamId, { kind: 'sheets', teamId }),
+    onError: (error) => log.error({ err: error }, 'a team could not be told that its list changed'),
+  });
   const rooms = new Rooms({
     openLog: replaced.openLog?.(openLog) ?? openLog,
     admit,
     onError: (error, about) => log.error({ err: error, ...about }, 'a sheet could not be stored'),
+    onStir: (sheetId) => listNews.ofSheet(sheetId),
   });
-  const events = createEvents((sessionId) => isLive(db, sessionId, now()));
-  const context: Context = { db, now, sessions, rooms, events, publicUrl: () => url };
+  const standings = createStandings({
+    rooms,
+    endOfLog: (sheetId) => endOfLog(db, sheetId),
+    onError: (error, about) => log.error({ err: error, ...about }, 'a sheet could not be solved for the list'),
+  });
+  const context: Context = { db, now, sessions, rooms, events, standings, listNews, publicUrl: () => url };
 
   const isReady = () => sqlite.open && sqlite.prepare('select 1').get() !== undefined;
   const { trustProxy } = config;
@@ -101,6 +116,7 @@ export async function startServer(config: Config, replaced: Replacements = {}): 
     demo,
     async stop() {
       clearInterval(chores);
+      listNews.end();
       const closed = new Promise((resolve) => server.close(resolve));
       events.endAll();
       rooms.shutDown();

@@ -8,9 +8,3 @@ export const DEMO_PEOPLE: readonly { name: string; email: string; role: Role }[]
   { name: 'Tove Bakken', email: 'tove@buoy.example', role: 'reviewer' },
   { name: 'Runa Leclerc', email: 'runa@buoy.example', role: 'viewer' },
 ];
-
-export const DEMO_SHEETS: readonly { name: string; starter: string }[] = [
-  { name: 'Hydrophone input pair', starter: 'differential-pair' },
-  { name: 'Bias mirror for the input pair', starter: 'mirror' },
-  { name: 'First gain stage', starter: 'four-resistor-stage' },
-];

@@ -1,4 +1,3 @@
-import { STARTERS } from '#shared/starters/starters';
 import { hashPassword, verifyPassword } from '../auth/passwords';
 import { newId } from '../auth/tokens';
 import type { Config } from '../config';
@@ -7,7 +6,10 @@ import { anyPerson, findPersonByEmail, insertPerson, setPasswordHash } from '../
 import { insertMembership, insertTeam } from '../db/queries/teams';
 import { storeNewSheet } from '../services/store-new-sheet';
 import { demoPassword } from './password';
-import { DEMO_PEOPLE, DEMO_SHEETS, DEMO_TEAM } from './people';
+import { DEMO_PEOPLE, DEMO_TEAM } from './people';
+import { demoSheets } from './sheets';
+
+const DAY = 86_400_000;
 
 export interface Demo {
   readonly password: string;
@@ -47,22 +49,18 @@ function seed(db: Db, passwordHash: string, now: number): void {
   db.transaction((tx) => {
     const teamId = newId();
     insertTeam(tx, { id: teamId, name: DEMO_TEAM, createdAt: now });
-    const ids = DEMO_PEOPLE.map(({ name, email, role }) => {
+    const idOf = new Map<string, string>();
+    for (const { name, email, role } of DEMO_PEOPLE) {
       const id = newId();
       insertPerson(tx, { id, name, email, passwordHash, createdAt: now });
       insertMembership(tx, { teamId, personId: id, role, joinedAt: now });
-      return id;
-    });
-    const [createdBy] = ids;
-    if (createdBy === undefined) throw new Error('The demo has no people.');
-    DEMO_SHEETS.forEach(({ name, starter }, index) => {
-      const drawing = STARTERS.find(({ id }) => id === starter)?.drawing;
-      if (!drawing) throw new Error(`There is no starter ${starter}.`);
-      const id = newId();
-      // The first of the list is the last changed.
-      const at = now - index * 3_600_000;
-      const times = { createdAt: at, changedAt: at };
-      storeNewSheet(tx, { id, teamId, name, state: 'draft', archived: false, createdBy, ...times }, drawing);
-    });
+      idOf.set(email, id);
+    }
+    for (const { name, begunBy, daysAgo, drawing } of demoSheets()) {
+      const createdBy = idOf.get(begunBy);
+      if (createdBy === undefined) throw new Error(`${begunBy} is not one of the demo's people.`);
+      const at = now - daysAgo * DAY;
+      storeNewSheet(tx, { id: newId(), teamId, name, createdBy, createdAt: at, changedAt: at }, drawing);
+    }
   });
 }

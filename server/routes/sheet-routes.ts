@@ -18,9 +18,10 @@ export function sheetRoutes(ctx: Context): Route[] {
       method: 'get',
       path: '/api/teams/:teamId/sheets',
       access: 'signed-in',
-      handle: ({ param, signedIn: { person } }) => ({
+      perMinute: 600,
+      handle: async ({ param, signedIn: { person } }) => ({
         status: 200,
-        body: { sheets: listSheets(ctx, param('teamId'), person.id) },
+        body: { sheets: await listSheets(ctx, param('teamId'), person.id) },
       }),
     },
     {

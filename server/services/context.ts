@@ -2,6 +2,8 @@ import type { Sessions } from '../auth/sessions';
 import type { Db } from '../db/connect';
 import type { Rooms } from '../sync/rooms';
 import type { Events } from './events';
+import type { ListNews } from './list-news';
+import type { Standings } from './standings';
 
 /** What every use case works with. */
 export interface Context {
@@ -11,6 +13,8 @@ export interface Context {
   readonly sessions: Sessions;
   readonly rooms: Rooms;
   readonly events: Events;
+  readonly standings: Standings;
+  readonly listNews: ListNews;
   /** The address that links begin with. */
   readonly publicUrl: () => string;
 }

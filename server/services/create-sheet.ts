@@ -8,31 +8,24 @@ import { readCircuit } from '#shared/circuit/read-circuit';
 import { BLANK_DRAWING, STARTERS } from '#shared/starters/starters';
 import { newId } from '../auth/tokens';
 import type { Context } from './context';
-import { sheetAnswerOf } from './sheet-answer';
+import { getSheet } from './get-sheet';
 import { storeNewSheet } from './store-new-sheet';
-import { requireTeam } from './team-access';
+import { requireSheet, requireTeam } from './team-access';
 import { tellTeam } from './tell-team';
 
-/** Makes a sheet: blank, from a starter, or from a circuit file. */
+/** Makes a sheet: blank, from a starter, from a circuit file, or as a copy of another as it is drawn now. */
 export function createSheet(ctx: Context, teamId: string, body: CreateSheetBody, askerId: string): SheetAnswer {
-  const team = requireTeam(ctx.db, teamId, askerId, 'edit-sheet');
+  requireTeam(ctx.db, teamId, askerId, 'edit-sheet');
+  const id = newId();
   const now = ctx.now();
-  const sheet = {
-    id: newId(),
-    teamId,
-    name: body.name,
-    state: 'draft' as const,
-    archived: false,
-    createdBy: askerId,
-    createdAt: now,
-    changedAt: now,
-  };
-  storeNewSheet(ctx.db, sheet, drawingFor(body));
-  tellTeam(ctx, teamId, { kind: 'sheet', teamId, sheetId: sheet.id });
-  return { sheet: sheetAnswerOf(sheet), team };
+  const sheet = { id, teamId, name: body.name, createdBy: askerId, createdAt: now, changedAt: now };
+  storeNewSheet(ctx.db, sheet, drawingFor(ctx, body, askerId));
+  tellTeam(ctx, teamId, { kind: 'sheet', teamId, sheetId: id });
+  return getSheet(ctx, id, askerId);
 }
 
-function drawingFor({ starter, circuit }: CreateSheetBody): Drawing {
+function drawingFor(ctx: Context, { starter, circuit, copyOf }: CreateSheetBody, askerId: string): Drawing {
+  if (copyOf !== undefined) return ctx.rooms.drawing(requireSheet(ctx.db, copyOf, askerId, 'open-sheet').sheet.id);
   if (circuit !== undefined) return importDrawing(circuit);
   if (starter === undefined) return BLANK_DRAWING;
   const found = STARTERS.find(({ id }) => id === starter);

@@ -11,5 +11,6 @@ export function sheetAnswerOf(row: SheetRow): Sheet {
     archived,
     createdAt: new Date(row.createdAt).toISOString(),
     changedAt: new Date(row.changedAt).toISOString(),
+    createdBy: row.author,
   };
 }

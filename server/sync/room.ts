@@ -8,7 +8,9 @@ import { askForMissing, type ClientMessage, tellMissing, tellPresence, tellRefus
 import { Presences } from './presences';
 import type { CloseCode } from './socket-codes';
 
-export interface RoomTroubles {
+export interface RoomNews {
+  /** Someone came or went, or the changes have fallen quiet. */
+  stirred(): void;
   /** Changes could not be stored: the document in memory is ahead of the log and must be let go. */
   failed(room: Room, error: unknown): void;
   /** The log could not be shortened; nothing is lost. */
@@ -17,6 +19,8 @@ export interface RoomTroubles {
 
 /** How long changes are gathered into one commit, in milliseconds. */
 const GATHER = 3;
+/** How long nothing must change for the changes to have fallen quiet, in milliseconds. */
+const QUIET = 1_000;
 /** Rows in the log at which one row is put in their place. */
 const COMPACT_AT = 500;
 /** The largest change taken at once; the frame around it may be larger, so that its sender can be told. */
@@ -32,14 +36,15 @@ export class Room {
   private readonly presences: Presences;
   private pending: { update: Uint8Array; from: unknown }[] = [];
   private timer: NodeJS.Timeout | undefined;
+  private quiet: NodeJS.Timeout | undefined;
   private rows: number;
   private readonly log: SheetLog;
-  private readonly troubles: RoomTroubles;
+  private readonly news: RoomNews;
 
   /** Loads the sheet. Throws when its log cannot be read. */
-  constructor(log: SheetLog, troubles: RoomTroubles) {
+  constructor(log: SheetLog, news: RoomNews) {
     this.log = log;
-    this.troubles = troubles;
+    this.news = news;
     const updates = log.load();
     this.rows = updates.length;
     this.doc.transact(() => {
@@ -62,10 +67,13 @@ export class Room {
     member.send(askForMissing(this.doc));
     const everyone = this.presences.all();
     if (everyone) member.send(everyone);
+    this.news.stirred();
   }
 
   leave(member: Member): void {
-    if (this.members.delete(member)) this.presences.remove(member);
+    if (!this.members.delete(member)) return;
+    this.presences.remove(member);
+    this.news.stirred();
   }
 
   /** Shows everybody the member's new role. */
@@ -122,12 +130,14 @@ export class Room {
     try {
       this.log.append(stored.map(({ update }) => update));
     } catch (error) {
-      this.troubles.failed(this, error);
+      this.news.failed(this, error);
       return false;
     }
     for (const { update, from } of stored) this.broadcast(tellUpdate(update), from);
     this.rows += stored.length;
     if (this.rows >= COMPACT_AT) this.compact();
+    clearTimeout(this.quiet);
+    this.quiet = setTimeout(() => this.news.stirred(), QUIET);
     return true;
   }
 
@@ -138,7 +148,7 @@ export class Room {
       this.log.compact(Y.encodeStateAsUpdate(this.doc));
       this.rows = 1;
     } catch (error) {
-      this.troubles.notCompacted(error);
+      this.news.notCompacted(error);
     }
   }
 
@@ -152,6 +162,7 @@ export class Room {
   /** Lets go of the document. What has not been stored is lost, so flush first. */
   destroy(): void {
     clearTimeout(this.timer);
+    clearTimeout(this.quiet);
     this.members.clear();
     this.doc.destroy();
   }

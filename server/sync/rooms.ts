@@ -1,4 +1,5 @@
 import type { Role } from '#shared/access/roles';
+import type { Person } from '#shared/api/accounts';
 import type { Drawing } from '#shared/circuit/drawing';
 import { readDrawing } from '#shared/doc/read-drawing';
 import type { OpenLog } from './log';
@@ -12,17 +13,27 @@ export type Admission =
   | { readonly admitted: false; readonly code: CloseCode; readonly reason: string };
 export type Admit = (who: { personId: string; sessionId: string }, sheetId: string) => Admission;
 
+interface RoomsDeps {
+  readonly openLog: OpenLog;
+  readonly admit: Admit;
+  readonly onError: (error: unknown, about: { sheetId: string }) => void;
+  /** Someone came to a sheet or left it, or its changes have fallen quiet. */
+  readonly onStir: (sheetId: string) => void;
+}
+
 /** Every sheet that somebody has open. */
 export class Rooms {
   private readonly rooms = new Map<string, Room>();
   private readonly openLog: OpenLog;
   private readonly admit: Admit;
-  private readonly onError: (error: unknown, about: { sheetId: string }) => void;
+  private readonly onError: RoomsDeps['onError'];
+  private readonly onStir: RoomsDeps['onStir'];
 
-  constructor(deps: { openLog: OpenLog; admit: Admit; onError: (error: unknown, about: { sheetId: string }) => void }) {
+  constructor(deps: RoomsDeps) {
     this.openLog = deps.openLog;
     this.admit = deps.admit;
     this.onError = deps.onError;
+    this.onStir = deps.onStir;
   }
 
   /** The room of this sheet, loaded when nobody has it open. Throws when the log cannot be read. */
@@ -30,6 +41,7 @@ export class Rooms {
     const open = this.rooms.get(sheetId);
     if (open) return open;
     const room = new Room(this.openLog(sheetId), {
+      stirred: () => this.onStir(sheetId),
       failed: (failed, error) => this.fail(sheetId, failed, error),
       notCompacted: (error) => this.onError(error, { sheetId }),
     });
@@ -50,6 +62,12 @@ export class Rooms {
     if (room.members.size === 0) this.release(sheetId, room);
     if (!stored) throw new Error(`The last changes of sheet ${sheetId} could not be stored.`);
     return drawing;
+  }
+
+  /** Who has the sheet open, each person once however many windows they have. */
+  peopleIn(sheetId: string): Person[] {
+    const members = this.rooms.get(sheetId)?.members ?? [];
+    return [...new Map([...members].map(({ person }) => [person.id, person])).values()];
   }
 
   /** To be called when a person's session, membership or role has changed: cuts or changes what they have open. */

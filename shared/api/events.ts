@@ -5,5 +5,7 @@ import { idField } from './fields';
 export const changeEvent = z.discriminatedUnion('kind', [
   z.object({ kind: z.literal('member'), teamId: idField, personId: idField }),
   z.object({ kind: z.literal('sheet'), teamId: idField, sheetId: idField }),
+  /** In the team's list: who has which sheet open, or how one of them stands. */
+  z.object({ kind: z.literal('sheets'), teamId: idField }),
 ]);
 export type ChangeEvent = z.infer<typeof changeEvent>;

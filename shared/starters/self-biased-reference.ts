@@ -60,7 +60,7 @@ export function selfBiasedReference({ withStart } = { withStart: true }): Drawin
   const out = sketch.junction(900, 230);
   sketch.wire(q5('drain'), out);
   sketch.wire(out, r2('a'));
-  sketch.wire(out, sketch.netName('out', 1000, 230, true));
+  sketch.wire(out, sketch.netName('out', 1080, 230, true));
 
   sketch.wire(v1('minus'), sketch.ground(0, 490));
   sketch.wire(q1('source'), sketch.ground(340, 490));

@@ -24,6 +24,7 @@ export function useServerEvents(signedIn: boolean): void {
     };
     source.addEventListener('member', onChange);
     source.addEventListener('sheet', onChange);
+    source.addEventListener('sheets', onChange);
     return () => source.close();
   }, [client, signedIn]);
 }
@@ -40,6 +41,9 @@ function refetchFor(client: QueryClient, event: ChangeEvent): void {
     case 'sheet':
       client.invalidateQueries({ queryKey: keys.sheets(event.teamId) });
       client.invalidateQueries({ queryKey: keys.sheet(event.sheetId) });
+      return;
+    case 'sheets':
+      client.invalidateQueries({ queryKey: keys.sheets(event.teamId) });
       return;
   }
 }

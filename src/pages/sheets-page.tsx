@@ -1,14 +1,18 @@
-import { useState } from 'react';
+import { lazy, Suspense, useState } from 'react';
 import { can } from '#shared/access/roles';
 import type { OwnTeam } from '#shared/api/accounts';
 import { BeginSheet } from '../features/sheets/begin-sheet';
 import type { Beginning } from '../features/sheets/beginning';
-import { NewSheetDialog } from '../features/sheets/new-sheet-dialog';
 import { TeamSheets } from '../features/sheets/team-sheets';
 import { OwnRole } from '../features/teams/role-notes';
 import { Button } from '../ui/button';
 import { PageTitle } from '../ui/page-title';
 import { TeamFrame } from './team-frame';
+
+// Most visits open a sheet that is there already.
+const NewSheetDialog = lazy(async () => ({
+  default: (await import('../features/sheets/new-sheet-dialog')).NewSheetDialog,
+}));
 
 /** The team's sheets, and the ways to begin one. */
 export function SheetsPage() {
@@ -29,7 +33,9 @@ export function SheetsPage() {
           </div>
           <TeamSheets key={team.id} team={team} onBegin={beginBlank} />
           {begin !== null && (
-            <NewSheetDialog teamId={team.id} begin={begin} onBegin={setBegin} onClose={() => setBegin(null)} />
+            <Suspense fallback={null}>
+              <NewSheetDialog teamId={team.id} begin={begin} onBegin={setBegin} onClose={() => setBegin(null)} />
+            </Suspense>
           )}
         </>
       )}

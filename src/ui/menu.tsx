@@ -21,6 +21,10 @@ export function Menu({ trigger, align = 'end', children }: MenuProps) {
           align={align}
           sideOffset={6}
           collisionPadding={8}
+          // What was chosen may have put the focus where it is wanted, which the closing menu would take back.
+          onCloseAutoFocus={(event) => {
+            if (document.activeElement !== document.body) event.preventDefault();
+          }}
           className="z-50 max-w-[min(20rem,calc(100vw-1rem))] min-w-52 border border-ink bg-sheet py-1.5"
         >
           {children}

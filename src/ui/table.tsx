@@ -19,6 +19,39 @@ export function HeadCell({ className = '', ...rest }: ThHTMLAttributes<HTMLTable
   );
 }
 
+interface SortHeadCellProps {
+  readonly label: string;
+  /** How the rows stand now by this column; undefined while they are ordered by another. */
+  readonly order: 'rising' | 'falling' | undefined;
+  readonly onSort: () => void;
+  readonly className?: string;
+}
+
+/** A head that orders the rows by its column, and turns the order round when pressed again. */
+export function SortHeadCell({ label, order, onSort, className = '' }: SortHeadCellProps) {
+  const sorted = { rising: 'ascending', falling: 'descending' } as const;
+  return (
+    <HeadCell className={className} {...(order === undefined ? {} : { 'aria-sort': sorted[order] })}>
+      <button
+        type="button"
+        className={`inline-flex min-h-6 items-center gap-2 hover:text-ink ${order === undefined ? '' : 'text-ink'}`}
+        onClick={onSort}
+      >
+        {label}
+        <svg
+          width="8"
+          height="6"
+          viewBox="0 0 8 6"
+          aria-hidden="true"
+          className={order === undefined ? 'invisible' : ''}
+        >
+          <path d={order === 'falling' ? 'M0 0H8L4 6Z' : 'M0 6H8L4 0Z'} fill="currentColor" />
+        </svg>
+      </button>
+    </HeadCell>
+  );
+}
+
 export function Cell({ className = '', ...rest }: TdHTMLAttributes<HTMLTableCellElement>) {
   return <td {...rest} className={`border-b border-rule py-2 pr-3 last:pr-0 sm:pr-6 sm:last:pr-0 ${className}`} />;
 }

@@ -1,5 +1,7 @@
 import { describe, expect, onTestFinished, test, vi } from 'vitest';
 import { type ChangeEvent, changeEvent } from '#shared/api/events';
+import { setTemperature } from '#shared/doc/commands';
+import { LiveSheet } from './support/live-sheet';
 import { startTestServer } from './support/start-test-server';
 import { assembleTeam, type Visitor } from './support/visitor';
 
@@ -49,6 +51,18 @@ describe('the stream of events', () => {
     const member = { kind: 'member', teamId, personId: designer.personId };
     await vi.waitFor(() => expect(watching.events).toEqual([sheet, sheet, member]));
     expect(elsewhere.events).toEqual([]);
+  });
+
+  test('tells that somebody came to a sheet, changed it and left, for the list to say so', async () => {
+    const sheetId = await owner.createSheet(teamId);
+    const stream = await listen(viewer);
+    const list = { kind: 'sheets', teamId };
+    const live = await new LiveSheet(server, owner, sheetId).synced();
+    await vi.waitFor(() => expect(stream.events).toEqual([list]));
+    setTemperature(live.doc, 60);
+    await vi.waitFor(() => expect(stream.events).toEqual([list, list]), { timeout: 5000 });
+    live.leave();
+    await vi.waitFor(() => expect(stream.events).toEqual([list, list, list]));
   });
 
   test('tells somebody that they were removed', async () => {

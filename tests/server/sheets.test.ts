@@ -81,6 +81,8 @@ describe('a sheet', () => {
     const make = (more: object) => ines.post(`/api/teams/${teamId}/sheets`, { name: 'Input pair', ...more });
     expect(fieldsOf(await make({ starter: 'none-such' })).starter).toContain('mirror');
     expect((await make({ starter: 'mirror', circuit: STAGE })).status).toBe(422);
+    expect((await make({ starter: 'mirror', copyOf: 'a sheet' })).status).toBe(422);
+    expect((await make({ copyOf: 'none-such' })).status).toBe(404);
     expect((await make({ name: '' })).status).toBe(422);
   });
 
@@ -95,6 +97,21 @@ describe('a sheet', () => {
     expect(sheets[0]).toMatchObject({ id, archived: true });
     expect((await ines.patch(`/api/sheets/${id}`, {})).status).toBe(422);
     expect((await ines.patch(`/api/sheets/${id}`, { teamId: 'another' })).status).toBe(422);
+  });
+
+  test('copied is the same drawing, and from then on another sheet', async () => {
+    const original = await ines.createSheet(teamId, { starter: 'cascode-mirror' });
+    const body = { name: 'Input pair, copy', copyOf: original };
+    const reply = await ines.post(`/api/teams/${teamId}/sheets`, body);
+    expect(reply.status).toBe(201);
+    const { sheet } = sheetAnswer.parse(reply.body);
+    expect(sheet).toMatchObject({ name: 'Input pair, copy', state: 'draft', createdBy: 'Ines Rautio' });
+    const [first, second] = [await circuitOf(original), await circuitOf(sheet.id)].map((one) =>
+      circuitFileSchema.parse(one),
+    );
+    expect(second).toEqual({ ...first, title: 'Input pair, copy' });
+    expect((await ines.delete(`/api/sheets/${original}`)).status).toBe(204);
+    expect((await point(sheet.id)).status).toBe('solved');
   });
 
   test('that was deleted is gone', async () => {

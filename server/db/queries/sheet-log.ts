@@ -13,6 +13,16 @@ export function loadUpdates(db: Db, sheetId: string): Uint8Array[] {
     .map((row) => row.content);
 }
 
+/** Where a sheet's log ends: another number whenever anything was stored. Undefined where there is no log. */
+export function endOfLog(db: Db, sheetId: string): number | undefined {
+  const row = db
+    .select({ seq: max(sheetUpdates.seq) })
+    .from(sheetUpdates)
+    .where(eq(sheetUpdates.sheetId, sheetId))
+    .get();
+  return row?.seq ?? undefined;
+}
+
 /** Stores all of these, or none, and notes when the sheet changed. */
 export function appendUpdates(db: Db, sheetId: string, updates: readonly Uint8Array[], now: number): void {
   db.transaction((tx) => {
@@ -30,14 +40,10 @@ export function insertUpdate(db: Db, sheetId: string, update: Uint8Array): void 
 /** Puts one row with the whole state in the place of every row there is. */
 export function compactUpdates(db: Db, sheetId: string, state: Uint8Array): void {
   db.transaction((tx) => {
-    const last = tx
-      .select({ seq: max(sheetUpdates.seq) })
-      .from(sheetUpdates)
-      .where(eq(sheetUpdates.sheetId, sheetId))
-      .get();
+    const end = endOfLog(tx, sheetId) ?? 0;
     insertUpdate(tx, sheetId, state);
     tx.delete(sheetUpdates)
-      .where(and(eq(sheetUpdates.sheetId, sheetId), lte(sheetUpdates.seq, last?.seq ?? 0)))
+      .where(and(eq(sheetUpdates.sheetId, sheetId), lte(sheetUpdates.seq, end)))
       .run();
   });
 }

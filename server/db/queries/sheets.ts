@@ -1,22 +1,33 @@
-import { desc, eq } from 'drizzle-orm';
+import { desc, eq, getTableColumns } from 'drizzle-orm';
 import type { Db } from '../connect';
-import { sheets } from '../schema';
+import { people, sheets } from '../schema';
 
-export type SheetRow = typeof sheets.$inferSelect;
+/** A sheet with the name of whoever began it. */
+export type SheetRow = typeof sheets.$inferSelect & { author: string };
 
-export function insertSheet(db: Db, sheet: typeof sheets.$inferInsert): void {
+const sheetRow = { ...getTableColumns(sheets), author: people.name };
+
+export type NewSheetRow = typeof sheets.$inferInsert;
+
+export function insertSheet(db: Db, sheet: NewSheetRow): void {
   db.insert(sheets).values(sheet).run();
 }
 
 export function findSheet(db: Db, id: string): SheetRow | undefined {
-  return db.select().from(sheets).where(eq(sheets.id, id)).get();
+  return db
+    .select(sheetRow)
+    .from(sheets)
+    .innerJoin(people, eq(people.id, sheets.createdBy))
+    .where(eq(sheets.id, id))
+    .get();
 }
 
 /** Last changed first. */
 export function sheetsOf(db: Db, teamId: string): SheetRow[] {
   return db
-    .select()
+    .select(sheetRow)
     .from(sheets)
+    .innerJoin(people, eq(people.id, sheets.createdBy))
     .where(eq(sheets.teamId, teamId))
     .orderBy(desc(sheets.changedAt), desc(sheets.id))
     .all();

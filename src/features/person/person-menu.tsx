@@ -1,7 +1,6 @@
+import { Menu as MenuLines } from 'lucide-react';
 import { useEffect, useState } from 'react';
 import { useSession, useSignOut } from '../../api/session';
-import { initialsOf } from '../../formats/initials';
-import { Initials } from '../../ui/initials';
 import { Menu, MenuChoice, MenuItem, MenuLine, MenuNote } from '../../ui/menu';
 import { useStatus } from '../../ui/status';
 import { chooseTheme, chosenTheme, type Theme } from '../../ui/theme';
@@ -27,9 +26,11 @@ export function PersonMenu() {
         <button
           type="button"
           aria-label={`${person.name}, your menu`}
-          className="-mr-1 flex size-8 items-center justify-center"
+          className="-mr-1 flex h-8 min-w-8 items-center justify-center gap-2 px-1 hover:text-faint"
         >
-          <Initials text={initialsOf(person.name)} own />
+          {/* No initials: those stand for who is on a sheet now. */}
+          <span className="hidden max-w-40 truncate xl:block">{person.name}</span>
+          <MenuLines size={18} strokeWidth={1.5} aria-hidden />
         </button>
       }
     >

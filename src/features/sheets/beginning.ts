@@ -1,4 +1,4 @@
-import { STARTERS } from '#shared/starters/starters';
+import { STARTER_TITLES } from '#shared/starters/starter-titles';
 
 /** What a new sheet begins from. */
 export type Beginning =
@@ -8,7 +8,7 @@ export type Beginning =
 
 export const BEGINNINGS: readonly Beginning[] = [
   { kind: 'blank' },
-  ...STARTERS.map(({ id, name, about }) => ({ kind: 'starter', id, name, about }) as const),
+  ...STARTER_TITLES.map(({ id, name, about }) => ({ kind: 'starter', id, name, about }) as const),
   { kind: 'file' },
 ];
 

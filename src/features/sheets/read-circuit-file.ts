@@ -1,5 +1,3 @@
-import { readCircuit } from '#shared/circuit/read-circuit';
-
 /** 60 FETs come to about 30 kB; what is far beyond that is another kind of file. */
 const MOST_BYTES = 1_000_000;
 
@@ -19,6 +17,8 @@ export async function readCircuitFile(file: File): Promise<CircuitFile> {
     const reason = error instanceof Error ? error.message : String(error);
     return wrong(`This file is not JSON text: ${reason}. Correct it there, or choose another file.`);
   }
+  // Fetched with the first file: no other part of these pages reads circuits.
+  const { readCircuit } = await import('#shared/circuit/read-circuit');
   const read = readCircuit(circuit);
   if (!read.ok) {
     const problems = read.problems.filter((one) => one.severity === 'error').map((one) => one.message);

@@ -1,35 +1,43 @@
-import type { ReactNode } from 'react';
-import { Link } from 'react-router-dom';
-import type { Sheet, SheetState } from '#shared/api/sheets';
-import { Button } from '../../ui/button';
-import { Cell, HeadCell, Table } from '../../ui/table';
-import { When } from '../../ui/when';
+import type { ListedSheet } from '#shared/api/sheets';
+import { Select } from '../../ui/select';
+import { HeadCell, SortHeadCell, Table } from '../../ui/table';
+import { inOrder, SHEET_COLUMNS, type SheetColumn, type SheetOrder } from './sheet-order';
+import { type SheetActions, SheetRow } from './sheet-row';
 
-const STATE_TEXTS: Record<SheetState, string> = {
-  draft: 'draft',
-  'in-review': 'in review',
-  'signed-off': 'signed off',
-  changed: 'changed since sign-off',
+const COLUMN_LOOKS: Record<SheetColumn, string> = {
+  name: 'w-full md:w-auto',
+  fets: 'hidden text-right sm:table-cell',
+  worst: 'hidden md:table-cell',
+  margin: 'hidden text-right xl:table-cell',
+  here: 'hidden sm:table-cell',
+  changed: 'hidden sm:table-cell',
 };
 
 interface SheetListProps {
   readonly label: string;
-  readonly sheets: readonly Sheet[];
-  /** What may be done with each; null where the reader may do nothing. */
-  readonly action: ((sheet: Sheet) => ReactNode) | null;
+  readonly sheets: readonly ListedSheet[];
+  readonly order: SheetOrder;
+  readonly onOrder: (order: SheetOrder) => void;
+  readonly actions: SheetActions;
 }
 
-/** Sheets, one a line. */
-export function SheetList({ label, sheets, action }: SheetListProps) {
+/** Sheets, one a line, in an order that any column sets. */
+export function SheetList({ label, sheets, order, onOrder, actions }: SheetListProps) {
+  const hasActions = Object.values(actions).some(Boolean);
   return (
     <Table label={label}>
       <thead>
         <tr>
-          <HeadCell className="w-full sm:w-1/2">name</HeadCell>
-          <HeadCell className="hidden sm:table-cell">state</HeadCell>
-          <HeadCell className="hidden md:table-cell">begun</HeadCell>
-          <HeadCell className="hidden sm:table-cell">last change</HeadCell>
-          {action !== null && (
+          {SHEET_COLUMNS.map(({ key, label: name, falling }) => (
+            <SortHeadCell
+              key={key}
+              label={name}
+              className={COLUMN_LOOKS[key]}
+              order={order.by === key ? (order.falling ? 'falling' : 'rising') : undefined}
+              onSort={() => onOrder({ by: key, falling: order.by === key ? !order.falling : falling })}
+            />
+          ))}
+          {hasActions && (
             <HeadCell>
               <span className="sr-only">actions</span>
             </HeadCell>
@@ -37,48 +45,31 @@ export function SheetList({ label, sheets, action }: SheetListProps) {
         </tr>
       </thead>
       <tbody>
-        {sheets.map((sheet) => (
-          <tr key={sheet.id}>
-            <Cell className="max-w-0">
-              <Link to={`/sheets/${sheet.id}`} className="block py-1 font-bold wrap-anywhere hover:underline">
-                {sheet.name}
-              </Link>
-              <span className="block text-xs text-faint sm:hidden">
-                {STATE_TEXTS[sheet.state]}, <When at={sheet.changedAt} />
-              </span>
-            </Cell>
-            <Cell className="hidden whitespace-nowrap sm:table-cell">{STATE_TEXTS[sheet.state]}</Cell>
-            <Cell className="hidden text-faint md:table-cell">
-              <When at={sheet.createdAt} />
-            </Cell>
-            <Cell className="hidden sm:table-cell">
-              <When at={sheet.changedAt} />
-            </Cell>
-            {action !== null && <Cell className="text-right">{action(sheet)}</Cell>}
-          </tr>
+        {inOrder(sheets, order).map((sheet) => (
+          <SheetRow key={sheet.id} sheet={sheet} actions={actions} hasActions={hasActions} />
         ))}
       </tbody>
     </Table>
   );
 }
 
-interface RowActionProps {
-  readonly sheet: Sheet;
-  readonly text: string;
-  readonly busy: boolean;
-  readonly onClick: () => void;
-}
-
-export function RowAction({ sheet, text, busy, onClick }: RowActionProps) {
+/** The same orders where there is no room for heads. */
+export function OrderSelect({ order, onOrder }: Pick<SheetListProps, 'order' | 'onOrder'>) {
   return (
-    <Button
-      look="quiet"
-      className="text-xs whitespace-nowrap"
-      busy={busy}
-      aria-label={`${text}: ${sheet.name}`}
-      onClick={onClick}
+    <Select
+      aria-label="Order by"
+      className="h-9 w-40 shrink-0 xl:hidden"
+      value={order.by}
+      onChange={(event) => {
+        const chosen = SHEET_COLUMNS.find(({ key }) => key === event.target.value);
+        if (chosen) onOrder({ by: chosen.key, falling: chosen.falling });
+      }}
     >
-      {text}
-    </Button>
+      {SHEET_COLUMNS.map(({ key, label }) => (
+        <option key={key} value={key}>
+          {label}
+        </option>
+      ))}
+    </Select>
   );
 }

@@ -1,75 +1,88 @@
+import { useDeferredValue, useState } from 'react';
 import { can } from '#shared/access/roles';
 import type { OwnTeam } from '#shared/api/accounts';
-import type { Sheet } from '#shared/api/sheets';
-import { useChangeSheet, useSheets } from '../../api/sheets';
+import type { ListedSheet } from '#shared/api/sheets';
+import { useSheets } from '../../api/sheets';
 import { Button } from '../../ui/button';
 import { Empty, Failure } from '../../ui/notice';
-import { useStatus } from '../../ui/status';
 import { Waiting } from '../../ui/waiting';
-import { RowAction, SheetList } from './sheet-list';
+import { OrderSelect, SheetList } from './sheet-list';
+import { answersTo, LAST_CHANGED_FIRST } from './sheet-order';
+import { useSheetActions } from './use-sheet-actions';
 
 interface TeamSheetsProps {
   readonly team: OwnTeam;
   readonly onBegin: () => void;
 }
 
-/** The team's sheets, last changed first; the archived ones folded away under them. */
+/** The team's sheets, to be sought and ordered; the archived ones folded away under them. */
 export function TeamSheets({ team, onBegin }: TeamSheetsProps) {
   const sheets = useSheets(team.id);
-  const change = useChangeSheet();
-  const { say, warn } = useStatus();
   if (sheets.isPending) return <Waiting>Fetching the sheets</Waiting>;
   if (sheets.isError) {
     return <Failure onRetry={() => sheets.refetch()}>The sheets could not be fetched. {sheets.error.message}</Failure>;
   }
+  if (sheets.data.length === 0) return <NoSheet mayBegin={can(team.role, 'edit-sheet')} onBegin={onBegin} />;
+  return <FoundSheets team={team} sheets={sheets.data} onBegin={onBegin} />;
+}
 
-  const archive = (sheet: Sheet, archived: boolean) =>
-    change.mutate(
-      { sheetId: sheet.id, archived },
-      {
-        onSuccess: () =>
-          say(archived ? `“${sheet.name}” is archived, under the list.` : `“${sheet.name}” is back in the list.`),
-        onError: (error) =>
-          warn(`“${sheet.name}” could not be ${archived ? 'archived' : 'brought back'}. ${error.message}`),
-      },
-    );
-  const action = (text: string, archived: boolean) =>
-    can(team.role, 'archive-sheet')
-      ? (sheet: Sheet) => (
-          <RowAction
-            sheet={sheet}
-            text={text}
-            busy={change.isPending && change.variables.sheetId === sheet.id}
-            onClick={() => archive(sheet, archived)}
-          />
-        )
-      : null;
+function NoSheet({ mayBegin, onBegin }: { readonly mayBegin: boolean; readonly onBegin: () => void }) {
+  return mayBegin ? (
+    <Empty title="No sheet yet">
+      <p>
+        A sheet holds one drawing that the whole team sees live. Begin with a blank one, a ready-drawn stage or a
+        circuit file.
+      </p>
+      <Button look="strong" className="max-lg:hidden" onClick={onBegin}>
+        New sheet
+      </Button>
+    </Empty>
+  ) : (
+    <Empty title="No sheet yet">
+      <p>Sheets that a designer of the team begins appear here.</p>
+    </Empty>
+  );
+}
 
-  const live = sheets.data.filter((sheet) => !sheet.archived);
-  const archived = sheets.data.filter((sheet) => sheet.archived);
+function FoundSheets({ team, sheets, onBegin }: TeamSheetsProps & { readonly sheets: readonly ListedSheet[] }) {
+  const [sought, setSought] = useState('');
+  const [order, setOrder] = useState(LAST_CHANGED_FIRST);
+  const actions = useSheetActions(team);
+  const seeking = useDeferredValue(sought.trim());
+  const found = seeking === '' ? sheets : sheets.filter((sheet) => answersTo(sheet, seeking));
+  const live = found.filter((sheet) => !sheet.archived);
+  const archived = found.filter((sheet) => sheet.archived);
+  const list = { order, onOrder: setOrder };
   return (
     <>
-      {live.length > 0 ? (
-        <SheetList label="Sheets" sheets={live} action={action('Archive', true)} />
-      ) : can(team.role, 'edit-sheet') ? (
-        <Empty title="No sheet yet">
-          <p>
-            A sheet holds one drawing that the whole team sees live. Begin with a blank one, a ready-drawn stage or a
-            circuit file.
-          </p>
-          <Button look="strong" className="max-lg:hidden" onClick={onBegin}>
-            New sheet
-          </Button>
-        </Empty>
-      ) : (
-        <Empty title="No sheet yet">
-          <p>Sheets that a designer of the team begins appear here.</p>
+      <div className="mb-2 flex gap-3">
+        <input
+          type="search"
+          aria-label="Find a sheet"
+          placeholder="Find by name or author"
+          autoComplete="off"
+          className="h-9 w-full min-w-0 border border-edge bg-sheet px-2.5 sm:max-w-72"
+          value={sought}
+          onChange={(event) => setSought(event.target.value)}
+        />
+        <OrderSelect {...list} />
+      </div>
+      <p role="status" className="sr-only">
+        {seeking === '' ? '' : `${found.length} found`}
+      </p>
+      {live.length > 0 && <SheetList label="Sheets" sheets={live} actions={actions.live} {...list} />}
+      {live.length === 0 && seeking === '' && <NoSheet mayBegin={can(team.role, 'edit-sheet')} onBegin={onBegin} />}
+      {found.length === 0 && (
+        <Empty title={`Nothing found for “${seeking}”`}>
+          <p>No sheet of {team.name} has that in its name, its state or the name of whoever began it.</p>
+          <Button onClick={() => setSought('')}>Show all sheets</Button>
         </Empty>
       )}
       {archived.length > 0 && (
-        <details className="mt-8">
+        // What is sought may be among the archived ones, so they come out then.
+        <details className="mt-8" open={seeking !== '' || undefined}>
           <summary className="cursor-pointer py-1 text-faint">{archived.length} archived</summary>
-          <SheetList label="Archived sheets" sheets={archived} action={action('Bring back', false)} />
+          <SheetList label="Archived sheets" sheets={archived} actions={actions.archived} {...list} />
         </details>
       )}
     </>

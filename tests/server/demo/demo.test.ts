@@ -17,7 +17,7 @@ async function signInAs(server: Running, email: string, password: string) {
 }
 
 describe('the demo', () => {
-  test('has a person of each role and a solved sheet from each starter', async () => {
+  test('has a person of each role and a sheet of every sort, from settled to missed', async () => {
     const file = temporaryFile('demo.db');
     const server = await startServer(config('demo', file));
     const { password = '', people = [] } = server.demo ?? {};
@@ -32,10 +32,17 @@ describe('the demo', () => {
     const { visitor } = await signInAs(server, 'ines@buoy.example', password);
     const teamId = await visitor.teamId();
     const { sheets } = sheetsAnswer.parse((await visitor.get(`/api/teams/${teamId}/sheets`)).body);
-    expect(sheets).toHaveLength(3);
-    for (const { id } of sheets) {
-      expect((await visitor.get(`/api/sheets/${id}/operating-point`)).body).toMatchObject({ status: 'solved' });
-    }
+    const worst = sheets.map(({ name, standing }) => [
+      name,
+      standing?.status === 'solved' && `${standing.worst?.ref} ${standing.worst?.verdict} of ${standing.fets}`,
+    ]);
+    expect(Object.fromEntries(worst)).toEqual({
+      'Hydrophone input pair': 'Q6 missed of 6',
+      'Second stage, cascode': 'Q1 missed of 2',
+      'Bias reference': expect.stringMatching(/met of 5$/),
+      'First stage': 'Q1 met of 1',
+      'Cable driver, 12 V': expect.stringMatching(/met of 4$/),
+    });
     await server.stop();
   });
 

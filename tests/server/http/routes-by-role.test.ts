@@ -96,6 +96,17 @@ describe.each(CALLERS.map((caller, index) => ({ caller, index })))('$caller', ({
   });
 });
 
+test('copying a sheet is for those who may edit the team’s sheets, and only of a sheet they may open', async () => {
+  const { sheetId } = makeThings();
+  const copy = async (caller: Caller) =>
+    (await (await arrive(caller)).post(`/api/teams/${teamId}/sheets`, { name: 'Copy', copyOf: sheetId })).status;
+  expect(await Promise.all(CALLERS.map(copy))).toEqual([401, 404, 403, 403, 201, 201]);
+
+  const odd = await new Visitor(server).signUp('Odd Utne');
+  const elsewhere = await odd.teamId();
+  expect((await odd.post(`/api/teams/${elsewhere}/sheets`, { name: 'Copy', copyOf: sheetId })).status).toBe(404);
+});
+
 test('archiving is for owners, though designers may rename', async () => {
   const { sheetId } = makeThings();
   expect((await (await arrive('designer')).patch(`/api/sheets/${sheetId}`, { archived: true })).status).toBe(403);

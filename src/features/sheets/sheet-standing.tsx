@@ -1,0 +1,42 @@
+import type { ListedSheet } from '#shared/api/sheets';
+import { formatScaled } from '#shared/units/format-value';
+import { standingWords } from '../../formats/standing-words';
+import { VERDICT_TEXT, VerdictShape } from '../../formats/verdict-shape';
+
+type Standing = ListedSheet['standing'];
+
+/** The device of least slack, or why none is named. */
+export function WorstDevice({ standing }: { readonly standing: Standing }) {
+  if (standing === null) return <span className="text-faint">being solved</span>;
+  switch (standing.status) {
+    case 'empty':
+      return <span className="text-faint">nothing drawn</span>;
+    case 'unsolved':
+    case 'invalid':
+      return (
+        <>
+          <span className="block text-missed">cannot be solved</span>
+          <span className="line-clamp-2 text-xs text-faint wrap-anywhere">{standing.reason}</span>
+        </>
+      );
+    case 'solved': {
+      const { worst, fets } = standing;
+      if (worst === null) return <span className="text-faint">{fets === 0 ? 'no FET' : 'no intent set'}</span>;
+      const { verdict, by } = standingWords(worst);
+      return (
+        <span className={`inline-flex flex-wrap items-center gap-x-2 ${VERDICT_TEXT[verdict]}`}>
+          <VerdictShape verdict={verdict} />
+          <span className="font-bold">{worst.ref}</span>
+          <span>
+            {verdict} <span className="whitespace-nowrap">{by}</span>
+          </span>
+        </span>
+      );
+    }
+  }
+}
+
+/** The margin of the worst device, in millivolts; a dash where there is none. */
+export function worstMargin(standing: Standing): string {
+  return standing?.status === 'solved' && standing.worst ? formatScaled(standing.worst.margin, -3) : '–';
+}
