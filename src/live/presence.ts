@@ -6,6 +6,9 @@ import type { GridPoint } from '#shared/geometry/place';
 import type { Room } from './room';
 import type { Selection } from './selection';
 
+/** The middle of what somebody has in view, in px of the sheet, and how large they see it. */
+export type SharedView = GridPoint & { readonly zoom: number };
+
 /** Somebody else on this sheet, as the server vouches for them. */
 export type OtherPerson = {
   /** Of the connection: one person in two windows is there twice. */
@@ -14,10 +17,11 @@ export type OtherPerson = {
   readonly initials: string;
   readonly selection: ReadonlySet<PartId>;
   readonly pointer: GridPoint | undefined;
+  readonly view: SharedView | undefined;
 };
 
-/** Most often that a moving pointer is told to the others, in ms. */
-const POINTER_INTERVAL = 50;
+/** Most often that a moving pointer or view is told to the others, in ms. */
+const PRESENCE_INTERVAL = 50;
 
 const presenceSchema = z.object({
   user: z.object({ name: z.string(), initials: z.string() }),
@@ -26,6 +30,7 @@ const presenceSchema = z.object({
     .or(z.object({ x: z.number(), y: z.number() }))
     .optional()
     .catch(undefined),
+  view: z.object({ x: z.number(), y: z.number(), zoom: z.number().positive() }).optional().catch(undefined),
 });
 
 /** Everyone else who is here; what they say of themselves is read with suspicion, who they are comes from the server. */
@@ -45,8 +50,8 @@ export function useOthers(room: Room): readonly OtherPerson[] {
       if (client === awareness.clientID) continue;
       const presence = presenceSchema.safeParse(state);
       if (!presence.success) continue;
-      const { user, selection, pointer } = presence.data;
-      others.push({ id: client, ...user, selection: new Set(selection), pointer });
+      const { user, selection, pointer, view } = presence.data;
+      others.push({ id: client, ...user, selection: new Set(selection), pointer, view });
     }
     others.sort((a, b) => a.id - b.id);
     if (!equalityDeep(last.current, others)) last.current = others;
@@ -54,24 +59,30 @@ export function useOthers(room: Room): readonly OtherPerson[] {
   });
 }
 
-/** Tells the others what is selected here; returns how to tell where the pointer is. */
-export function usePresence(room: Room, selection: Selection): (at: GridPoint | undefined) => void {
+/** Tells the others what is selected here; returns how to tell where the pointer is and what is in view. */
+export function usePresence(room: Room, selection: Selection) {
   const { awareness } = room;
   useEffect(() => awareness.setLocalStateField('selection', [...selection.parts]), [awareness, selection]);
+  const pointer = useThrottledField<GridPoint | undefined>(room, 'pointer');
+  const view = useThrottledField<SharedView>(room, 'view');
+  return useMemo(() => ({ tellPointer: pointer, tellView: view }), [pointer, view]);
+}
+
+function useThrottledField<T extends GridPoint | undefined>({ awareness }: Room, field: string): (value: T) => void {
   const throttled = useMemo(() => {
     let waiting: ReturnType<typeof setTimeout> | undefined;
-    let latest: GridPoint | undefined;
+    let latest: T | undefined;
     return {
-      tell(at: GridPoint | undefined) {
-        latest = at && { x: Math.round(at.x), y: Math.round(at.y) };
+      tell(value: T) {
+        latest = value && { ...value, x: Math.round(value.x), y: Math.round(value.y) };
         waiting ??= setTimeout(() => {
           waiting = undefined;
-          awareness.setLocalStateField('pointer', latest);
-        }, POINTER_INTERVAL);
+          awareness.setLocalStateField(field, latest);
+        }, PRESENCE_INTERVAL);
       },
       stop: () => clearTimeout(waiting),
     };
-  }, [awareness]);
+  }, [awareness, field]);
   useEffect(() => throttled.stop, [throttled]);
   return throttled.tell;
 }

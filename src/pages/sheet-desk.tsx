@@ -42,7 +42,10 @@ export function SheetDesk({ room, state, answer: { sheet, team } }: SheetDeskPro
   const [frame, setFrame] = useState<{ part: PartId; request: number }>();
   const [announcement, setAnnouncement] = useState('');
   const others = useOthers(room);
-  const tellPointer = usePresence(room, selection);
+  const { tellPointer, tellView } = usePresence(room, selection);
+  const [followedId, setFollowedId] = useState<number>();
+  const followed = others.find(({ id }) => id === followedId);
+  const leaveFollowed = useCallback(() => setFollowedId(undefined), []);
 
   const shown = drawing.parts.find(({ id }) => id === slipPart);
   const closeSlip = useCallback(() => setSlipPart(undefined), []);
@@ -86,7 +89,13 @@ export function SheetDesk({ room, state, answer: { sheet, team } }: SheetDeskPro
           <SheetName sheetId={sheet.id} name={sheet.name} editable={canEdit} />
           <p className="text-faint">{sheet.state.replace('-', ' ')}</p>
           <SafeState state={state} />
-          <PeopleHere own={{ name: person.name, initials: initialsOf(person.name) }} others={others} />
+          <PeopleHere
+            own={{ name: person.name, initials: initialsOf(person.name) }}
+            others={others}
+            followed={followedId}
+            onFollow={setFollowedId}
+          />
+          {followed && <p className="text-xs text-faint">following {followed.name} until you move the view</p>}
           {canEdit ? (
             <UndoRedo commands={commands} />
           ) : (
@@ -118,6 +127,9 @@ export function SheetDesk({ room, state, answer: { sheet, team } }: SheetDeskPro
             frame={frame}
             announce={setAnnouncement}
             onPointer={tellPointer}
+            followed={followed?.view}
+            onView={tellView}
+            onLeaveFollowed={leaveFollowed}
           />
         </main>
         <Ledger

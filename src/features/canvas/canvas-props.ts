@@ -3,7 +3,7 @@ import type { Region } from '#shared/circuit/circuit-file';
 import type { Drawing, DrawnComponent, DrawnFet, PartId } from '#shared/circuit/drawing';
 import type { DrawnNets } from '#shared/circuit/nets';
 import type { GridPoint } from '#shared/geometry/place';
-import type { OtherPerson } from '../../live/presence';
+import type { OtherPerson, SharedView } from '../../live/presence';
 import type { Selection } from '../../live/selection';
 import type { SheetCommands } from '../../live/sheet-commands';
 
@@ -33,4 +33,8 @@ export type CanvasProps = {
   announce(message: string): void;
   /** Where the pointer is on the sheet. */
   onPointer?(at: GridPoint | undefined): void;
+  /** The view of the person who is followed, and what is in view here. */
+  readonly followed: SharedView | undefined;
+  onView(view: SharedView): void;
+  onLeaveFollowed(): void;
 };

@@ -1,6 +1,16 @@
-import { type MouseEvent, type PointerEvent, useCallback, useEffect, useMemo, useRef, useState } from 'react';
+import {
+  type MouseEvent,
+  type PointerEvent,
+  useCallback,
+  useEffect,
+  useLayoutEffect,
+  useMemo,
+  useRef,
+  useState,
+} from 'react';
 import { ReactFlowProvider, useStoreApi } from 'reactflow';
 import type { PartId, WireEnd } from '#shared/circuit/drawing';
+import { terminalKey } from '#shared/circuit/nets';
 import type { GridPoint } from '#shared/geometry/place';
 import './canvas.css';
 import { type CanvasParts, CanvasPartsProvider } from './canvas-context';
@@ -15,10 +25,13 @@ import { litNet } from './lit-net';
 import { Marks } from './marks';
 import { NetMarks } from './net-marks';
 import { spokenPart } from './part-text';
+import { pressWire } from './press-wire';
 import { SheetFlow } from './sheet-flow';
+import type { SheetGeometry } from './sheet-geometry';
 import { SlipOverlay } from './slip-overlay';
 import { partBox } from './symbol-box';
 import { Tray } from './tray';
+import { useBending } from './use-bending';
 import { useFlowChanges } from './use-flow-changes';
 import { useLatest } from './use-latest';
 import { useMoving } from './use-moving';
@@ -26,6 +39,7 @@ import { usePlacing } from './use-placing';
 import { useSheetPicture } from './use-sheet-picture';
 import { useView } from './use-view';
 import { useWiring } from './use-wiring';
+import { ViewSharing } from './view-sharing';
 import { ViewportLayer } from './viewport-layer';
 
 const unknownRegion = () => undefined;
@@ -52,7 +66,13 @@ function Board(props: CanvasProps) {
   useQuietStrictMode();
 
   const { elsewhere, hands: moving } = useMoving(drawing, commands, announce);
-  const { geometry, graph, texts } = useSheetPicture(drawing, nets, elsewhere);
+  const shownGeometry = useRef<SheetGeometry>(undefined);
+  const { bent, hands: bending } = useBending({ drawing, geometry: shownGeometry, commands, announce });
+  const inHand = useMemo(() => ({ elsewhere, bent }), [elsewhere, bent]);
+  const { geometry, graph, texts } = useSheetPicture(drawing, nets, inHand);
+  useLayoutEffect(() => {
+    shownGeometry.current = geometry;
+  }, [geometry]);
   const latestPicture = useLatest({ geometry, texts });
 
   const placed = useRef<PartId>(undefined);
@@ -80,8 +100,13 @@ function Board(props: CanvasProps) {
       pressTerminal: (end, event) => {
         if (!placingHands.now()) wiringHands.press(end, event);
       },
+      pressWire: commands.canEdit
+        ? (wire, event) => {
+            if (!placingHands.now() && !wiringHands.now()) pressWire(wire, event, bending, view.toSheet);
+          }
+        : undefined,
     }),
-    [Tag, PartProblem, useRegion, wiringHands, placingHands],
+    [Tag, PartProblem, useRegion, wiringHands, placingHands, bending, commands.canEdit, view],
   );
   const { nodes, edges } = useFlowElements(drawing, geometry, nets, selection, slipPart, texts);
   const lit = useMemo(
@@ -110,6 +135,7 @@ function Board(props: CanvasProps) {
       return selectedAtPress.current;
     },
     moving,
+    bending,
     placing: placingHands,
     wiring: wiringHands,
     slipOpen: slipPart !== undefined,
@@ -119,6 +145,8 @@ function Board(props: CanvasProps) {
           .filter(({ from, to }) => [from, to].some((end) => end.part === part && end.pin === pin))
           .map(({ id }) => id),
       ),
+    terminalAt: (end) => geometry.terminals.get(terminalKey(end))?.at,
+    spokenWire: (id) => edges.find((edge) => edge.id === id)?.ariaLabel ?? 'Wire',
     select: onSelect,
     placingStart: () => pointer.current ?? middleOfSelected() ?? view.middle(),
     focusPart(id) {
@@ -221,6 +249,7 @@ function Board(props: CanvasProps) {
           <Marks geometry={geometry} selected={selection.parts} lit={props.lit} others={props.others} />
           <HandMarks placing={placing} wiring={wiring} geometry={geometry} />
         </ViewportLayer>
+        <ViewSharing followed={props.followed} onView={props.onView} onLeave={props.onLeaveFollowed} />
         {slip !== undefined && slipOn && (
           <SlipOverlay
             key={slipOn.id}
