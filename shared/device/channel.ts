@@ -1,5 +1,5 @@
 import type { FetModel } from './fet-model';
-import { emptySquareLaw, type SquareLaw, squareLaw } from './square-law';
+import { emptySquareLaw, type SquareLaw, squareLaw, thresholdAt } from './square-law';
 
 /** A channel between its labelled ends, as Kirchhoff's current law needs it. */
 export interface Channel {
@@ -66,4 +66,11 @@ export function evaluateChannel(
   out.byBody = direction * law.gmb;
   out.byDrain = out.reversed ? atSourceEnd : atDrainEnd;
   out.bySource = out.reversed ? atDrainEnd : atSourceEnd;
+}
+
+/** V, the overdrive alone of a channel at terminal voltages to ground. */
+export function overdriveOf(model: FetModel, drain: number, gate: number, source: number, body: number): number {
+  const { sign } = model;
+  const low = sign * (drain - source) < 0 ? drain : source;
+  return sign * (gate - low) - thresholdAt(model, model.bodyTied ? 0 : sign * (low - body));
 }

@@ -19,8 +19,7 @@ export interface SquareLaw {
  * and `vsb` are measured from the end of the channel at the lower potential. Written into `out`.
  */
 export function squareLaw(model: FetModel, vgs: number, vds: number, vsb: number, out: SquareLaw): void {
-  const root = Math.sqrt(Math.max(model.surfacePotential + vsb, 0));
-  out.vt = model.threshold + model.gamma * (root - Math.sqrt(model.surfacePotential));
+  out.vt = thresholdAt(model, vsb);
   out.vov = vgs - out.vt;
   if (out.vov <= 0) {
     out.id = 0;
@@ -41,7 +40,15 @@ export function squareLaw(model: FetModel, vgs: number, vds: number, vsb: number
     out.gm = model.kn * out.vov * modulation;
     out.gds = flat * model.lambda;
   }
-  out.gmb = root > 0 && model.gamma > 0 && !model.bodyTied ? (out.gm * model.gamma) / (2 * root) : 0;
+  const depleted = model.surfacePotential + vsb;
+  const hasBodyEffect = depleted > 0 && model.gamma > 0 && !model.bodyTied;
+  out.gmb = hasBodyEffect ? (out.gm * model.gamma) / (2 * Math.sqrt(depleted)) : 0;
+}
+
+/** V, the threshold with the source `vsb` above the body: the long channel's body effect, its root clipped at zero. */
+export function thresholdAt({ threshold, gamma, surfacePotential }: FetModel, vsb: number): number {
+  if (gamma === 0) return threshold;
+  return threshold + gamma * (Math.sqrt(Math.max(surfacePotential + vsb, 0)) - Math.sqrt(surfacePotential));
 }
 
 export function emptySquareLaw(): SquareLaw {

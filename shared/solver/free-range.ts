@@ -19,10 +19,15 @@ const PROBES = [1e-3, -1e-3, 2e-2, -2e-2];
 /**
  * Looks for a net that may lie anywhere: inverse iteration gives the direction in which the currents change least (Ipsen,
  * SIAM Review 39, 1997, from memory); the net that moves most along it is then moved, the others solved again, and
- * its current law is read. Null when the point is the only one around.
+ * its current law is read. Null when the point is the only one around. `isFactored` where the Jacobian at `x` was factored last.
  */
-export function findFreeRange(equations: Equations, x: Float64Array, held: Float64Array): FreeRange | null {
-  const direction = leastResistedDirection(equations, x, { ...TRUE_CIRCUIT, held });
+export function findFreeRange(
+  equations: Equations,
+  x: Float64Array,
+  held: Float64Array,
+  isFactored = false,
+): FreeRange | null {
+  const direction = leastResistedDirection(equations, x, { ...TRUE_CIRCUIT, held }, isFactored);
   if (!direction) return null;
   let group = -1;
   for (const [i, share] of direction.entries()) {
@@ -46,17 +51,25 @@ export function findFreeRange(equations: Equations, x: Float64Array, held: Float
 }
 
 /** The direction, largest entry 1, along which the scaled currents change least; null when all change clearly. */
-function leastResistedDirection(equations: Equations, x: Float64Array, conditions: Conditions): Float64Array | null {
+function leastResistedDirection(
+  equations: Equations,
+  x: Float64Array,
+  conditions: Conditions,
+  isFactored: boolean,
+): Float64Array | null {
   const { size, jacobian, throughput, lu, network } = equations;
   if (size === 0) return null;
   equations.evaluate(x, conditions);
   const { starts, rows } = network.pattern;
   const conductance = equations.conductances();
   const bare = jacobian.slice();
-  for (const [group, slot] of network.diagonal.entries()) {
-    jacobian[slot] = (jacobian[slot] ?? 0) + 1e-12 * (conductance[group] ?? 0) + 1e-18;
+  if (!isFactored) {
+    // A little on the diagonal, as the matrix may be singular.
+    for (const [group, slot] of network.diagonal.entries()) {
+      jacobian[slot] = (jacobian[slot] ?? 0) + 1e-12 * (conductance[group] ?? 0) + 1e-18;
+    }
+    if (!lu.factor(jacobian)) return null;
   }
-  if (!lu.factor(jacobian)) return null;
   const direction = Float64Array.from({ length: size }, (_, i) => 1 + ((i * 0.618034) % 1));
   for (let iteration = 0; iteration < INVERSE_ITERATIONS; iteration++) {
     for (let i = 0; i < size; i++) direction[i] = (direction[i] ?? 0) * ((conductance[i] ?? 0) || 1e-18);

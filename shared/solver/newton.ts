@@ -1,5 +1,6 @@
-import { emptyChannel, evaluateChannel } from '../device/channel';
+import { overdriveOf } from '../device/channel';
 import type { Conditions, Equations } from './equations';
+import type { NetworkFet } from './network';
 
 export interface NewtonResult {
   readonly status: 'converged' | 'singular' | 'not-converged';
@@ -31,20 +32,17 @@ export function newton(
   conditions: Conditions,
   mostIterations: number,
 ): NewtonResult {
-  const { size, residual, lu } = equations;
-  const step = new Float64Array(size);
-  const trial = new Float64Array(size);
-  const weight = new Float64Array(size);
+  const { size, residual, lu, step, trial, weight } = equations;
   let rises = 0;
   equations.evaluate(x, conditions);
   for (let iteration = 1; iteration <= mostIterations; iteration++) {
     if (!lu.factor(equations.jacobian)) return { status: 'singular', iterations: iteration };
-    for (let i = 0; i < size; i++) step[i] = -(residual[i] ?? 0);
+    for (let i = 0; i < size; i++) step[i] = -(residual[i] as number);
     lu.solve(step);
-    if (!step.every(Number.isFinite)) return { status: 'singular', iterations: iteration };
+    if (!isAllFinite(step)) return { status: 'singular', iterations: iteration };
 
     equations.conductances(weight);
-    for (let i = 0; i < size; i++) weight[i] = 1 / (weight[i] ?? 1);
+    for (let i = 0; i < size; i++) weight[i] = 1 / (weight[i] as number);
     const before = norm(residual, weight);
     if (isSmall(step, x)) {
       advance(x, step, 1, trial);
@@ -55,7 +53,7 @@ export function newton(
       return { status: 'converged', iterations: iteration };
     }
 
-    const longest = longestStep(equations, x, step, conditions.supply);
+    const longest = longestStep(equations, x, step);
     let share = longest;
     let halvings = 0;
     for (; ; halvings++) {
@@ -76,41 +74,52 @@ export function newton(
 }
 
 function advance(x: Float64Array, step: Float64Array, share: number, into: Float64Array): void {
-  for (let i = 0; i < x.length; i++) into[i] = (x[i] ?? 0) + share * (step[i] ?? 0);
+  for (let i = 0; i < x.length; i++) into[i] = (x[i] as number) + share * (step[i] as number);
+}
+
+function isAllFinite(step: Float64Array): boolean {
+  for (let i = 0; i < step.length; i++) if (!Number.isFinite(step[i])) return false;
+  return true;
 }
 
 function isSmall(step: Float64Array, x: Float64Array): boolean {
-  return step.every((change, i) => Math.abs(change) <= STEP_ABSOLUTE + STEP_RELATIVE * Math.abs(x[i] ?? 0));
+  for (let i = 0; i < step.length; i++) {
+    if (Math.abs(step[i] as number) > STEP_ABSOLUTE + STEP_RELATIVE * Math.abs(x[i] as number)) return false;
+  }
+  return true;
 }
 
 function norm(residual: Float64Array, weight: Float64Array): number {
   let sum = 0;
-  for (let i = 0; i < residual.length; i++) sum += ((residual[i] ?? 0) * (weight[i] ?? 0)) ** 2;
+  for (let i = 0; i < residual.length; i++) {
+    const weighted = (residual[i] as number) * (weight[i] as number);
+    sum += weighted * weighted;
+  }
   return Math.sqrt(sum);
 }
 
-const here = emptyChannel();
-const there = emptyChannel();
-
-/** The share of a step, at most 1, that keeps every overdrive and every net within its limit. */
-function longestStep(equations: Equations, x: Float64Array, step: Float64Array, supply: number): number {
-  const { network, netVoltages: v } = equations;
+/** The share of a step, at most 1, that keeps every overdrive and every net within its limit. The equations stand evaluated at `x`. */
+function longestStep(equations: Equations, x: Float64Array, step: Float64Array): number {
+  const { network, netVoltages: v, overdrives } = equations;
+  const { fets, groupOf } = network;
   let share = 1;
   for (let i = 0; i < x.length; i++) {
-    const limit = NET_STEP + Math.abs(x[i] ?? 0);
-    share = Math.min(share, limit / Math.abs(step[i] ?? 0));
+    const limit = NET_STEP + Math.abs(x[i] as number);
+    const length = Math.abs(step[i] as number);
+    if (share * length > limit) share = limit / length;
   }
-  equations.spreadVoltages(x, supply);
   const to = (net: number): number => {
-    const group = network.groupOf[net] ?? -1;
-    return (v[net] ?? 0) + (group < 0 ? 0 : share * (step[group] ?? 0));
+    const group = groupOf[net] as number;
+    return (v[net] as number) + (group < 0 ? 0 : share * (step[group] as number));
   };
-  for (const { model, drain, gate, source, body } of network.fets) {
-    evaluateChannel(model, v[drain] ?? 0, v[gate] ?? 0, v[source] ?? 0, v[body] ?? 0, here);
-    evaluateChannel(model, to(drain), to(gate), to(source), to(body), there);
-    const limit = OVERDRIVE_STEP + Math.abs(here.law.vov);
-    const change = Math.abs(there.law.vov - here.law.vov);
-    if (Math.max(here.law.vov, there.law.vov) > 0 && change > limit) share *= limit / change;
+  for (let index = 0; index < fets.length; index++) {
+    const { model, drain, gate, source, body } = fets[index] as NetworkFet;
+    const here = overdrives[index] as number;
+    const there = overdriveOf(model, to(drain), to(gate), to(source), to(body));
+    if (here <= 0 && there <= 0) continue;
+    const limit = OVERDRIVE_STEP + Math.abs(here);
+    const change = Math.abs(there - here);
+    if (change > limit) share *= limit / change;
   }
   return share;
 }

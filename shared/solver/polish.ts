@@ -1,7 +1,8 @@
 import { type Equations, TRUE_CIRCUIT } from './equations';
 import { type FreeRange, findFreeRange } from './free-range';
 import { newton } from './newton';
-import { findUndrivenPieces, restUndrivenPieces, type UndrivenPiece } from './undriven-nets';
+import { hasNegativeDeterminant } from './stability';
+import { findUndrivenPieces, isDrivenThroughout, restUndrivenPieces, type UndrivenPiece } from './undriven-nets';
 
 /** S, the leakage that points are looked for with. */
 export const SEARCH_LEAKAGE = 1e-12;
@@ -22,6 +23,7 @@ export type Polished =
       readonly undriven: readonly UndrivenPiece[];
       /** NaN where free, else the voltage an undriven group rests at. */
       readonly held: Float64Array;
+      readonly surelyUnstable: boolean;
       readonly iterations: number;
     }
   | { readonly kind: 'free-range'; readonly range: FreeRange; readonly iterations: number }
@@ -30,18 +32,8 @@ export type Polished =
 /** Takes a point found with `SEARCH_LEAKAGE` to the circuit's own equations, without leakage, or tells why there is none near. */
 export function polish(equations: Equations, found: Float64Array): Polished {
   const x = found.slice();
-  let iterations = 0;
-  const coarser = x.slice();
-  for (const finer of FINER_LEAKAGES) {
-    const trial = x.slice();
-    const result = newton(equations, trial, { leakage: finer, supply: 1 }, MOST_ITERATIONS);
-    iterations += result.iterations;
-    if (result.status !== 'converged') break;
-    coarser.set(x);
-    x.set(trial);
-  }
-
-  const undriven = findUndrivenPieces(equations, coarser, x);
+  const { undriven, iterations: spent } = findUndriven(equations, x);
+  let iterations = spent;
   for (const piece of undriven) {
     if (piece.forcedThroughput === 0) continue;
     if (Math.abs(piece.forced) > BALANCE * piece.forcedThroughput) return { kind: 'none', iterations };
@@ -66,9 +58,28 @@ export function polish(equations: Equations, found: Float64Array): Polished {
     }
     if (undriven.length === 0) break;
   }
-  const range = findFreeRange(equations, x, held);
+  // Newton's method has left the factors of the Jacobian a nanovolt away, which serve both questions.
+  const surelyUnstable = hasNegativeDeterminant(equations);
+  const range = findFreeRange(equations, x, held, true);
   if (range) return { kind: 'free-range', range, iterations };
-  return balances(equations, x) ? { kind: 'point', x, undriven, held, iterations } : { kind: 'none', iterations };
+  if (!balances(equations, x)) return { kind: 'none', iterations };
+  return { kind: 'point', x, undriven, held, surelyUnstable, iterations };
+}
+
+/** The pieces that leakage alone holds at `x`, which is brought to a much smaller leakage if there may be any. */
+function findUndriven(equations: Equations, x: Float64Array): { undriven: UndrivenPiece[]; iterations: number } {
+  let iterations = 0;
+  if (isDrivenThroughout(equations, x, SEARCH_LEAKAGE)) return { undriven: [], iterations };
+  const coarser = x.slice();
+  for (const finer of FINER_LEAKAGES) {
+    const trial = x.slice();
+    const result = newton(equations, trial, { leakage: finer, supply: 1 }, MOST_ITERATIONS);
+    iterations += result.iterations;
+    if (result.status !== 'converged') break;
+    coarser.set(x);
+    x.set(trial);
+  }
+  return { undriven: findUndrivenPieces(equations, coarser, x), iterations };
 }
 
 /** Whether all currents cancel to rounding at every net, held ones included. */

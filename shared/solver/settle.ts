@@ -2,11 +2,11 @@ import { type Equations, TRUE_CIRCUIT } from './equations';
 import type { FreeRange } from './free-range';
 import { stepLeakage } from './leakage-stepping';
 import { type NewtonResult, newton } from './newton';
-import { type Polished, polish, SEARCH_LEAKAGE } from './polish';
+import { polish, SEARCH_LEAKAGE } from './polish';
 import { settleInPseudoTime } from './pseudo-transient';
 import { measure, rank } from './ranking';
 import { stepSources } from './source-stepping';
-import { growingDirection, isSurelyUnstable } from './stability';
+import { growingDirection } from './stability';
 import { startingPoints } from './starting-points';
 import type { UndrivenPiece } from './undriven-nets';
 
@@ -103,13 +103,9 @@ export function settleFrom(equations: Equations, start: Float64Array): Settled {
     const polished = polish(equations, x);
     iterations += polished.iterations;
     if (polished.kind === 'free-range') return { ...polished, iterations };
-    if (polished.kind === 'point') return judged(equations, polished, iterations);
+    if (polished.kind === 'point') return { ...polished, iterations };
   }
   return { kind: 'none', x: nearest, iterations };
-}
-
-function judged(equations: Equations, point: Extract<Polished, { kind: 'point' }>, iterations: number): Point {
-  return { ...point, surelyUnstable: isSurelyUnstable(equations, point.x, point.held), iterations };
 }
 
 /** Where the circuit goes when it is pushed off an unstable point to either side. */
@@ -120,7 +116,7 @@ function leave(equations: Equations, point: Point): Settled[] {
     const result = settleInPseudoTime(equations, x, SEARCH_LEAKAGE);
     const polished = result.status === 'converged' ? polish(equations, x) : null;
     const iterations = result.iterations + (polished?.iterations ?? 0);
-    return polished?.kind === 'point' ? judged(equations, polished, iterations) : { kind: 'none', x, iterations };
+    return polished?.kind === 'point' ? { ...polished, iterations } : { kind: 'none', x, iterations };
   });
 }
 

@@ -8,19 +8,17 @@ const RESISTOR_OVERDRIVE = 0.5;
 const SATURATED_SLOPE = 0.1;
 
 /**
- * Starts for Newton's method, in the order they are tried, each the solution of a linear circuit: all channels on as
- * resistors, which lets self-biased circuits begin where they carry current; all devices saturated at an overdrive;
- * the resistors leaning to N and to P; and last all nets at 0 V.
+ * Starts for Newton's method, in the order they are tried, each the solution of a linear circuit: all devices saturated at an
+ * overdrive, where most circuits are meant to be; all channels on as resistors, which too lets self-biased circuits begin
+ * where they carry current; the resistors leaning to N and to P; and last all nets at 0 V.
  */
-export function startingPoints(equations: Equations): Float64Array[] {
-  return [
-    solveLinear(equations, resistor(1, 1)),
-    solveLinear(equations, saturated(0.2)),
-    solveLinear(equations, saturated(0.6)),
-    solveLinear(equations, resistor(30, 1 / 30)),
-    solveLinear(equations, resistor(1 / 30, 30)),
-    new Float64Array(equations.size),
-  ];
+export function* startingPoints(equations: Equations): Generator<Float64Array> {
+  yield solveLinear(equations, saturated(0.2));
+  yield solveLinear(equations, resistor(1, 1));
+  yield solveLinear(equations, saturated(0.6));
+  yield solveLinear(equations, resistor(30, 1 / 30));
+  yield solveLinear(equations, resistor(1 / 30, 30));
+  yield new Float64Array(equations.size);
 }
 
 function resistor(n: number, p: number): (model: FetModel) => LinearFet {

@@ -1,4 +1,4 @@
-import { emptyChannel, evaluateChannel } from '../device/channel';
+import { overdriveOf } from '../device/channel';
 import type { Equations } from './equations';
 import type { Network, NetworkFet } from './network';
 
@@ -22,6 +22,25 @@ export interface UndrivenPiece {
   readonly forcedThroughput: number;
 }
 
+/** A device that could carry this many times all the leakage there is does not carry leakage alone. */
+const BEYOND_LEAKAGE = 10;
+
+/** Whether resistors and devices that clearly conduct join every group to ground, so that nothing needs a closer look. */
+export function isDrivenThroughout(equations: Equations, x: Float64Array, leakage: number): boolean {
+  const { network, netVoltages: v } = equations;
+  equations.spreadVoltages(x);
+  const pieces = new Pieces(network);
+  for (const { a, b } of network.resistors) pieces.join(a, b);
+  let leaked = 0;
+  for (const voltage of v) leaked += leakage * Math.abs(voltage);
+  for (const fet of network.fets) {
+    const vov = overdrive(fet, v);
+    if (vov > 0 && (fet.model.kn / 2) * vov * vov > BEYOND_LEAKAGE * leaked) pieces.join(fet.drain, fet.source);
+  }
+  for (let group = 0; group < equations.size; group++) if (!pieces.isGrounded(group)) return false;
+  return true;
+}
+
 /**
  * Pieces that nothing which conducts joins to ground. `coarse` and `fine` solve the circuit with a larger and a much
  * smaller leakage: a FET is off when what it could carry at its overdrive falls with the leakage, since then it only
@@ -33,39 +52,27 @@ export function findUndrivenPieces(equations: Equations, coarse: Float64Array, f
   const before = network.fets.map((fet) => Math.max(0, overdrive(fet, equations.netVoltages)) ** 2);
   equations.spreadVoltages(fine);
   const v = equations.netVoltages;
-  const ground = equations.size;
-  const parent = Int32Array.from({ length: ground + 1 }, (_, index) => index);
-  const find = (group: number): number => {
-    let at = group;
-    while (parent[at] !== at) at = parent[at] ?? at;
-    return at;
-  };
-  const nodeOf = (net: number): number => {
-    const group = network.groupOf[net] ?? -1;
-    return group < 0 ? ground : group;
-  };
-  const join = (a: number, b: number): void => {
-    const [low, high] = [find(nodeOf(a)), find(nodeOf(b))].sort((one, other) => one - other);
-    if (low !== undefined && high !== undefined) parent[low] = high;
-  };
-  for (const { a, b } of network.resistors) join(a, b);
+  const joined = new Pieces(network);
+  for (const { a, b } of network.resistors) joined.join(a, b);
   for (const [index, fet] of network.fets.entries()) {
     const vov = overdrive(fet, v);
-    if (vov > EDGE && vov * vov > FALLING * (before[index] ?? 0)) join(fet.drain, fet.source);
+    if (vov > EDGE && vov * vov > FALLING * (before[index] ?? 0)) joined.join(fet.drain, fet.source);
   }
 
   const pieces = new Map<number, number[]>();
-  for (let group = 0; group < ground; group++) {
-    const root = find(group);
-    if (root === find(ground)) continue;
-    pieces.set(root, [...(pieces.get(root) ?? []), group]);
+  for (let group = 0; group < equations.size; group++) {
+    if (joined.isGrounded(group)) continue;
+    const root = joined.find(group);
+    const piece = pieces.get(root);
+    if (piece) piece.push(group);
+    else pieces.set(root, [group]);
   }
   return [...pieces].map(([root, groups]) => {
     let forced = 0;
     let forcedThroughput = 0;
     for (const { from, to, current } of network.currents) {
-      const leaves = find(nodeOf(from)) === root;
-      const enters = find(nodeOf(to)) === root;
+      const leaves = joined.find(joined.nodeOf(from)) === root;
+      const enters = joined.find(joined.nodeOf(to)) === root;
       if (leaves === enters) continue;
       forced += enters ? current : -current;
       forcedThroughput += Math.abs(current);
@@ -95,6 +102,45 @@ export function restUndrivenPieces(equations: Equations, x: Float64Array, pieces
       moved = Math.max(moved, Math.abs(shift));
     }
     if (moved <= AT_REST) return;
+  }
+}
+
+/** Groups joined by what conducts, as disjoint sets; the node past the last group is ground. */
+class Pieces {
+  readonly #network: Network;
+  readonly #ground: number;
+  readonly #parent: Int32Array;
+
+  constructor(network: Network) {
+    this.#network = network;
+    this.#ground = network.groups.length;
+    this.#parent = Int32Array.from({ length: this.#ground + 1 }, (_, node) => node);
+  }
+
+  nodeOf(net: number): number {
+    const group = this.#network.groupOf[net] as number;
+    return group < 0 ? this.#ground : group;
+  }
+
+  /** The node that stands for a set, its highest: path halving as in `UnionFind`. */
+  find(node: number): number {
+    const parent = this.#parent;
+    let at = node;
+    while (parent[at] !== at) {
+      parent[at] = parent[parent[at] as number] as number;
+      at = parent[at] as number;
+    }
+    return at;
+  }
+
+  join(a: number, b: number): void {
+    const one = this.find(this.nodeOf(a));
+    const other = this.find(this.nodeOf(b));
+    this.#parent[Math.min(one, other)] = Math.max(one, other);
+  }
+
+  isGrounded(group: number): boolean {
+    return this.find(group) === this.#ground;
   }
 }
 
@@ -140,21 +186,16 @@ function nearestToZero(boundary: readonly BoundaryFet[], v: Float64Array, from: 
   return off;
 }
 
-const channel = emptyChannel();
-
 function overdriveAt({ fet, moves }: BoundaryFet, v: Float64Array, shift: number): number {
-  evaluateChannel(
+  return overdriveOf(
     fet.model,
-    (v[fet.drain] ?? 0) + shift * moves.drain,
-    (v[fet.gate] ?? 0) + shift * moves.gate,
-    (v[fet.source] ?? 0) + shift * moves.source,
-    (v[fet.body] ?? 0) + shift * moves.body,
-    channel,
+    (v[fet.drain] as number) + shift * moves.drain,
+    (v[fet.gate] as number) + shift * moves.gate,
+    (v[fet.source] as number) + shift * moves.source,
+    (v[fet.body] as number) + shift * moves.body,
   );
-  return channel.law.vov;
 }
 
-function overdrive(fet: NetworkFet, v: Float64Array): number {
-  evaluateChannel(fet.model, v[fet.drain] ?? 0, v[fet.gate] ?? 0, v[fet.source] ?? 0, v[fet.body] ?? 0, channel);
-  return channel.law.vov;
+function overdrive({ model, drain, gate, source, body }: NetworkFet, v: Float64Array): number {
+  return overdriveOf(model, v[drain] as number, v[gate] as number, v[source] as number, v[body] as number);
 }
