@@ -115,11 +115,14 @@ export type DrawnFet = Extract<DrawnPart, { kind: 'nfet' | 'pfet' }>;
 export const wireEndSchema = z.strictObject({ part: partIdSchema, pin: z.string().max(16) });
 export type WireEnd = z.infer<typeof wireEndSchema>;
 
+/** Most corners of one's own choice on a wire. */
+export const MOST_BENDS = 64;
+
 export const wireSchema = z.strictObject({
   id: wireIdSchema,
   from: wireEndSchema,
   to: wireEndSchema,
-  bends: z.array(gridPointSchema).max(64),
+  bends: z.array(gridPointSchema).max(MOST_BENDS),
 });
 export type Wire = z.infer<typeof wireSchema>;
 

@@ -2,9 +2,11 @@ import { equalityDeep } from 'lib0/function';
 import type * as Y from 'yjs';
 import { catalogueEntry } from '../circuit/catalogue';
 import {
+  bodyLedOut,
   type DrawnKind,
   type DrawnPart,
   isComponent,
+  MOST_BENDS,
   type PartId,
   partIdSchema,
   type Wire,
@@ -12,7 +14,10 @@ import {
   type WireId,
   wireIdSchema,
 } from '../circuit/drawing';
+import { cutLine } from '../geometry/bend-wire';
+import { pinPlaces } from '../geometry/pins';
 import type { GridPoint, Place } from '../geometry/place';
+import { routeWire } from '../geometry/route-wire';
 import { sharedByGroups } from './match';
 import { nextReference } from './next-reference';
 import { readDrawing } from './read-drawing';
@@ -54,19 +59,53 @@ export function connect(doc: Y.Doc, from: WireEnd, to: WireEnd, newId: IdSource)
   });
 }
 
-/** Ties a terminal to the middle of a wire: a junction there, the wire in two halves. */
+/**
+ * Ties a terminal to the middle of a wire: a junction there, the wire in two halves that run where it ran, through its
+ * own corners (the caller may give those of a wire that found its own way).
+ */
 export function connectToWire(doc: Y.Doc, from: WireEnd, wire: Wire, at: GridPoint, newId: IdSource): PartId {
   return edit(doc, () => {
     const { wires, routes } = sheetMaps(doc);
+    const halves = halvesOf(doc, wire, at);
     const junction = addPart(doc, 'junction', { ...at, turn: 0, flip: false }, newId);
     const end: WireEnd = { part: junction, pin: 'net' };
     wires.delete(wire.id);
     routes.delete(wire.id);
-    for (const other of [wire.from, wire.to, from]) {
-      if (!sameEnd(other, end)) wires.set(wireIdSchema.parse(newId()), { from: other, to: end });
-    }
+    const tie = (other: WireEnd, bends: readonly GridPoint[]) => {
+      if (sameEnd(other, end)) return;
+      const id = wireIdSchema.parse(newId());
+      wires.set(id, { from: other, to: end });
+      if (bends.length > 0) routes.set(id, bends);
+    };
+    tie(wire.from, halves.before);
+    tie(wire.to, halves.after.reverse());
+    tie(from, []);
     return junction;
   });
+}
+
+/** Gives a wire corners of somebody's choice, in px on the grid; none lets it find its own way again. */
+export function setBends(doc: Y.Doc, id: WireId, bends: readonly GridPoint[]): void {
+  const { wires, routes } = sheetMaps(doc);
+  const before = routes.get(id) ?? [];
+  if (!wires.has(id) || bends.length > MOST_BENDS || equalityDeep(before, bends)) return;
+  edit(doc, () => {
+    if (bends.length > 0) routes.set(id, [...bends]);
+    else routes.delete(id);
+  });
+}
+
+/** The corners of a wire on either side of a point on it, both in the wire's own direction. */
+function halvesOf(doc: Y.Doc, { from, to, bends }: Wire, at: GridPoint) {
+  const { parts } = readDrawing(doc).drawing;
+  const endAt = (end: WireEnd) => {
+    const part = parts.find(({ id }) => id === end.part);
+    return part && pinPlaces(part.kind, part.place, bodyLedOut(part)).find(({ pin }) => pin === end.pin);
+  };
+  const [start, stop] = [endAt(from), endAt(to)];
+  if (!start || !stop) return { before: [], after: [] };
+  const [before, after] = cutLine(routeWire(start, stop, bends), at);
+  return { before, after };
 }
 
 /**

@@ -9,7 +9,7 @@ export type RouteEnd = { readonly at: GridPoint; readonly leaves: GridPoint };
  */
 export function routeWire(from: RouteEnd, to: RouteEnd, bends: readonly GridPoint[] = []): GridPoint[] {
   if (bends.length > 0) return tidy(throughBends(from, to, bends));
-  const candidates = shapes(from.at, to.at).map(tidy);
+  const candidates = routeShapes(from, to);
   let best = candidates[0] ?? [from.at, to.at];
   let least = Number.POSITIVE_INFINITY;
   for (const line of candidates) {
@@ -20,6 +20,11 @@ export function routeWire(from: RouteEnd, to: RouteEnd, bends: readonly GridPoin
     }
   }
   return best;
+}
+
+/** The plain shapes that a line from one end to another may have: with one corner, with two, and around. */
+export function routeShapes(from: RouteEnd, to: RouteEnd): GridPoint[][] {
+  return shapes(from.at, to.at).map(tidy);
 }
 
 function shapes(a: GridPoint, b: GridPoint): GridPoint[][] {
@@ -73,7 +78,7 @@ function throughBends(from: RouteEnd, to: RouteEnd, bends: readonly GridPoint[])
 }
 
 /** Without doubled points and without corners that are none. */
-function tidy(line: readonly GridPoint[]): GridPoint[] {
+export function tidy(line: readonly GridPoint[]): GridPoint[] {
   const kept: GridPoint[] = [];
   for (const point of line) {
     const last = kept[kept.length - 1];

@@ -7,6 +7,7 @@ import {
   connectToWire,
   placeParts,
   remove,
+  setBends,
   setReference,
   setTemperature,
   setValues,
@@ -25,6 +26,8 @@ export type SheetCommands = {
   addPart(kind: DrawnKind, place: Place, values?: DrawnPart['values']): PartId | undefined;
   connect(from: WireEnd, to: WireEnd): void;
   connectToWire(from: WireEnd, wire: Wire, at: GridPoint): void;
+  /** Corners of one's own choice for a wire; none lets it find its own way. */
+  setBends(wire: WireId, bends: readonly GridPoint[]): void;
   placeParts(places: ReadonlyMap<PartId, Place>): void;
   remove(parts: ReadonlySet<PartId>, wires: ReadonlySet<WireId>): void;
   /** SI base units; null takes the value away. */
@@ -81,6 +84,7 @@ export function useSheetCommands(room: Room, canEdit: boolean): SheetCommands {
       addPart: (kind, place, values) => step(() => addPart(doc, kind, place, newId, values)),
       connect: (from, to) => void step(() => connect(doc, from, to, newId)),
       connectToWire: (from, wire, at) => void step(() => connectToWire(doc, from, wire, at, newId)),
+      setBends: (wire, bends) => void step(() => setBends(doc, wire, bends)),
       placeParts: (places) => void step(() => placeParts(doc, places)),
       remove: (parts, wires) => void step(() => remove(doc, parts, wires)),
       setValue: (part, name, value) => void step(() => setValues(doc, new Map([[part.id, { [name]: value }]]))),

@@ -1,6 +1,6 @@
 import { type ComponentType, createContext, type PointerEvent, useContext } from 'react';
 import type { Region } from '#shared/circuit/circuit-file';
-import type { DrawnComponent, DrawnFet, WireEnd } from '#shared/circuit/drawing';
+import type { DrawnComponent, DrawnFet, WireEnd, WireId } from '#shared/circuit/drawing';
 
 /** What the page joins to the drawing; none of it changes while the page is open. */
 export type CanvasParts = {
@@ -12,6 +12,8 @@ export type CanvasParts = {
   readonly useRegion: (part: DrawnFet) => Region | undefined;
   /** A terminal was pressed: a wire begins. */
   pressTerminal(end: WireEnd, event: PointerEvent): void;
+  /** A wire was pressed, to push one of its stretches; absent where nothing may be changed. */
+  readonly pressWire: ((wire: WireId, event: PointerEvent) => void) | undefined;
 };
 
 const CanvasContext = createContext<CanvasParts | undefined>(undefined);

@@ -1,8 +1,9 @@
-import type { DrawnPart, PartId, WireEnd } from '#shared/circuit/drawing';
+import type { DrawnPart, PartId, WireEnd, WireId } from '#shared/circuit/drawing';
 import type { GridPoint } from '#shared/geometry/place';
 import type { Selection } from '../../live/selection';
 import type { SheetCommands } from '../../live/sheet-commands';
 import type { SheetGeometry } from './sheet-geometry';
+import type { BendingHands } from './use-bending';
 import type { MovingHands } from './use-moving';
 import type { PlacingHands } from './use-placing';
 import type { WiringHands } from './use-wiring';
@@ -18,7 +19,10 @@ export type Desk = {
   readonly placing: PlacingHands;
   readonly wiring: WiringHands;
   readonly moving: MovingHands;
+  readonly bending: BendingHands;
   readonly slipOpen: boolean;
+  readonly terminalAt: (end: WireEnd) => GridPoint | undefined;
+  readonly spokenWire: (wire: WireId) => string;
   select(selection: Selection): void;
   /** Where a part taken by its letter first appears. */
   placingStart(): GridPoint;

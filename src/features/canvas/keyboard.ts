@@ -8,6 +8,7 @@ import { asPartId } from './flow-elements';
 import { moveSelected, partKey, walkParts } from './part-keys';
 import { type ShownTerminal, terminalsOf } from './sheet-geometry';
 import { nextInDirection, nextInRing } from './walk';
+import { aimAtNextWire, pushSelectedWire, selectNextWire } from './wire-keys';
 
 /** Grid steps that a part being placed goes with Shift. */
 const SHIFT_STEPS = 5;
@@ -32,7 +33,10 @@ export function handleKey(event: KeyboardEvent, desk: Desk): void {
 
 /** A held arrow moves on; letting go of it drops the part, so that one press is one undo step. */
 export function handleKeyUp(event: KeyboardEvent, desk: Desk): void {
-  if (event.key in ARROWS || event.key === 'Shift') desk.moving.drop();
+  if (event.key in ARROWS || event.key === 'Shift') {
+    desk.moving.drop();
+    desk.bending.drop();
+  }
 }
 
 function handleHistory(event: KeyboardEvent, { commands, announce }: Desk): boolean {
@@ -65,7 +69,7 @@ function handlePlain(event: KeyboardEvent, desk: Desk): boolean {
   const arrow = ARROWS[key];
   const terminal = focusedTerminal(event, desk);
   if (desk.wiring.now()) return wiringKey(event, desk, terminal);
-  if (arrow && event.shiftKey) return moveSelected(arrow, desk);
+  if (arrow && event.shiftKey) return pushSelectedWire(arrow, desk) || moveSelected(arrow, desk);
   if (terminal) return terminalKeyPressed(event, desk, terminal);
   if (arrow) return walkParts(arrow, event, desk);
   return partKey(event, desk);
@@ -105,6 +109,7 @@ function wiringKey(event: KeyboardEvent, desk: Desk, focused: ShownTerminal | un
     desk.wiring.tie();
     return true;
   }
+  if (event.key === 'w') return aimAtNextWire(desk);
   const here = focused ?? desk.geometry.terminals.get(terminalKey(now.from));
   const next = here && nextTerminal(event.key, here, [...desk.geometry.terminals.values()]);
   if (!next) return event.key in ARROWS;
@@ -119,6 +124,7 @@ function terminalKeyPressed(event: KeyboardEvent, desk: Desk, terminal: ShownTer
     desk.wiring.begin(terminal.end);
     return true;
   }
+  if (event.key === 'w') return selectNextWire(terminal, desk);
   if (event.key === 'Delete' || event.key === 'Backspace') {
     const wires = desk.wiresAt(terminal.end);
     if (wires.size === 0) return false;
@@ -151,7 +157,7 @@ function nextTerminal(
 
 /** One thing after another is let go of, the nearest to the hand first. */
 function letGo(event: KeyboardEvent, desk: Desk): boolean {
-  if (desk.moving.abort() || desk.wiring.abort()) return true;
+  if (desk.moving.abort() || desk.bending.abort() || desk.wiring.abort()) return true;
   if (desk.placing.end()) {
     const [placed] = selectedParts(desk);
     if (placed) desk.focusPart(placed.id);

@@ -1,5 +1,5 @@
 import { bodyLedOut, type DrawnFet, type DrawnPart, isFet } from '#shared/circuit/drawing';
-import { type Anchor, around, type Box } from '#shared/geometry/box';
+import { type Anchor, around, type Box, hungBox } from '#shared/geometry/box';
 import { type GridPoint, onSheet, orient, type Place } from '#shared/geometry/place';
 import { type Block, type Candidate, placesAbout } from '#shared/geometry/place-tags';
 import { inkOnSheet } from '#shared/geometry/symbol-ink';
@@ -47,6 +47,12 @@ export function labelBlock(part: DrawnPart): Block | undefined {
       ...placesAbout(around(cornersOf(inkOf(part))), [RIGHT, LEFT, BELOW, ABOVE], 60),
     ],
   };
+}
+
+/** About where a part's label would like to stand; the same whatever its value, for wires must not move with values. */
+export function labelWish(part: DrawnPart): Box | undefined {
+  const [wish] = laidOut(LABEL_PLACES[part.kind] ?? [], part.place);
+  return wish && part.kind !== 'net-name' ? hungBox(wish, 8 * CHARACTER, 2 * LINE) : undefined;
 }
 
 /** A FET's tag: across the channel from its gate, level with it. */

@@ -2,9 +2,8 @@ import { useMemo, useRef } from 'react';
 import type { Drawing } from '#shared/circuit/drawing';
 import type { DrawnNets } from '#shared/circuit/nets';
 import { stillOnWire } from './net-spots';
-import { layOut, type SheetGeometry } from './sheet-geometry';
+import { type InHand, layOut, type SheetGeometry } from './sheet-geometry';
 import { placeTexts, type SheetTexts } from './sheet-texts';
-import type { Places } from './use-moving';
 import { type WireGraph, wireGraph } from './wire-graph';
 
 export type SheetPicture = {
@@ -17,18 +16,18 @@ export type SheetPicture = {
  * Where everything stands. While something is under the hand, texts go along with their parts and keep the places that
  * they had; only when all lies still do they look for better ones.
  */
-export function useSheetPicture(drawing: Drawing, nets: DrawnNets, elsewhere: Places): SheetPicture {
+export function useSheetPicture(drawing: Drawing, nets: DrawnNets, inHand: InHand): SheetPicture {
   const last = useRef<SheetGeometry>(undefined);
   const settled = useRef<SheetTexts>(undefined);
   return useMemo(() => {
-    const geometry = layOut(drawing, elsewhere, last.current);
+    const geometry = layOut(drawing, nets, inHand, last.current);
     last.current = geometry;
     const graph = wireGraph(drawing, geometry, nets);
-    if (elsewhere.size === 0 || !settled.current) {
+    if (geometry.settled || !settled.current) {
       settled.current = placeTexts(drawing, geometry, graph, nets);
       return { geometry, graph, texts: settled.current };
     }
     const spots = settled.current.spots.filter((spot) => stillOnWire(spot, graph));
     return { geometry, graph, texts: { ...settled.current, spots } };
-  }, [drawing, nets, elsewhere]);
+  }, [drawing, nets, inHand]);
 }

@@ -89,7 +89,9 @@ export function useWiring(sheet: Sheet): { wiring: Wiring | undefined; hands: Wi
         commands.connect(from, target.end);
         announce(`Tied ${spoken(from)} to ${spoken(target.end)}.`);
       } else {
-        commands.connectToWire(from, target.wire, target.at);
+        // The way it found for itself is the one that its halves keep.
+        const line = geometry.routes.get(target.wire.id) ?? [];
+        commands.connectToWire(from, { ...target.wire, bends: line.slice(1, -1) }, target.at);
         announce(`Tied ${spoken(from)} to the wire of net ${nets.netOf.get(terminalKey(target.wire.from)) ?? ''}.`);
       }
     };

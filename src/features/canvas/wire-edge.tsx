@@ -1,11 +1,29 @@
 import { memo } from 'react';
-import { BaseEdge, type EdgeProps } from 'reactflow';
+import type { EdgeProps } from 'reactflow';
 import type { GridPoint } from '#shared/geometry/place';
-import type { WireData } from './flow-elements';
+import { useCanvasParts } from './canvas-context';
+import { asWireId, type WireData } from './flow-elements';
+
+/** How near a wire the pointer must come, in px of the sheet, on both sides together. */
+const REACH = 14;
 
 /** A wire, drawn along the drawing's own route; React Flow's idea of where its ends are is not asked for. */
 export const WireEdge = memo(function WireEdge({ id, data }: EdgeProps<WireData>) {
-  return <BaseEdge id={id} path={pathOf(data?.line ?? [])} interactionWidth={14} />;
+  const { pressWire } = useCanvasParts();
+  const path = pathOf(data?.line ?? []);
+  return (
+    <>
+      <path className="react-flow__edge-path" d={path} fill="none" data-wire={id} />
+      <path
+        className={pressWire ? 'react-flow__edge-interaction nopan' : 'react-flow__edge-interaction'}
+        d={path}
+        fill="none"
+        strokeOpacity={0}
+        strokeWidth={REACH}
+        onPointerDown={pressWire && ((event) => pressWire(asWireId(id), event))}
+      />
+    </>
+  );
 });
 
 /** An SVG path along grid points, half a pixel aside so that a hairline falls on whole pixels. */

@@ -5,7 +5,7 @@ import { type Box, hungBox, overlap, stretchBoxes } from '#shared/geometry/box';
 import { mirrored, turned } from '#shared/geometry/place';
 import { STARTERS } from '#shared/starters/starters';
 import { spotBox } from '../../../src/features/canvas/net-spots';
-import { layOut } from '../../../src/features/canvas/sheet-geometry';
+import { layOut, NOTHING_IN_HAND } from '../../../src/features/canvas/sheet-geometry';
 import { onPart, placeTexts } from '../../../src/features/canvas/sheet-texts';
 import { inkOf, labelBlock, TAG_HEIGHT, TAG_WIDTH } from '../../../src/features/canvas/text-blocks';
 import { wireGraph } from '../../../src/features/canvas/wire-graph';
@@ -16,7 +16,7 @@ type Thing = { readonly name: string; readonly box: Box };
 /** What of a drawing lies over what, by name; nothing where every text has found its place. */
 function overlaps(drawing: Drawing): string[] {
   const nets = findNets(drawing);
-  const geometry = layOut(drawing, new Map(), undefined);
+  const geometry = layOut(drawing, nets, NOTHING_IN_HAND, undefined);
   const graph = wireGraph(drawing, geometry, nets);
   const { labels, tags, spots, written } = placeTexts(drawing, geometry, graph, nets);
   const texts: Thing[] = [];
@@ -72,7 +72,7 @@ test.each(STARTERS)(
   '$id: every FET has a tag, every part with a value a label, every named net its name',
   ({ drawing }) => {
     const nets = findNets(drawing);
-    const geometry = layOut(drawing, new Map(), undefined);
+    const geometry = layOut(drawing, nets, NOTHING_IN_HAND, undefined);
     const graph = wireGraph(drawing, geometry, nets);
     const texts = placeTexts(drawing, geometry, graph, nets);
     for (const part of drawing.parts) {
@@ -103,7 +103,7 @@ test('FETs close together, turned and mirrored, still keep their texts apart', (
 test('the outcome depends on the drawing alone, not on the order of its records', () => {
   const place = (drawing: Drawing) => {
     const nets = findNets(drawing);
-    const geometry = layOut(drawing, new Map(), undefined);
+    const geometry = layOut(drawing, nets, NOTHING_IN_HAND, undefined);
     const { tags, labels } = placeTexts(drawing, geometry, wireGraph(drawing, geometry, nets), nets);
     return [...tags, ...labels].map(([id, { at }]) => `${id} ${at.x} ${at.y}`).sort();
   };

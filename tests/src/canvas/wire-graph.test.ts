@@ -2,17 +2,16 @@ import { expect, test } from 'vitest';
 import type { Drawing } from '#shared/circuit/drawing';
 import { findNets } from '#shared/circuit/nets';
 import { STARTERS } from '#shared/starters/starters';
-import { layOut } from '../../../src/features/canvas/sheet-geometry';
+import { layOut, NOTHING_IN_HAND } from '../../../src/features/canvas/sheet-geometry';
 import { placeTexts } from '../../../src/features/canvas/sheet-texts';
 import { wireGraph } from '../../../src/features/canvas/wire-graph';
 import { drawingWith, drawn, wired } from '../../support/draw';
 
-const NOWHERE_ELSE = new Map();
 const R = { values: { resistance: 1e3 } };
 
 function graphOf(drawing: Drawing) {
   const nets = findNets(drawing);
-  const geometry = layOut(drawing, NOWHERE_ELSE, undefined);
+  const geometry = layOut(drawing, nets, NOTHING_IN_HAND, undefined);
   return { nets, geometry, graph: wireGraph(drawing, geometry, nets) };
 }
 
@@ -64,11 +63,12 @@ test.each(STARTERS)('$id: every name set on a wire is written into a stretch of 
 
 test('a part under the hand takes its wires along, and what lies still stays the same object', () => {
   const drawing = STARTERS[2]?.drawing ?? drawingWith([]);
-  const before = layOut(drawing, NOWHERE_ELSE, undefined);
+  const nets = findNets(drawing);
+  const before = layOut(drawing, nets, NOTHING_IN_HAND, undefined);
   const moved = drawing.parts.find((part) => 'ref' in part && part.ref === 'R2');
   if (!moved) throw new Error('the starter has no R2');
   const to = { ...moved.place, x: moved.place.x + 50 };
-  const after = layOut(drawing, new Map([[moved.id, to]]), before);
+  const after = layOut(drawing, nets, { ...NOTHING_IN_HAND, elsewhere: new Map([[moved.id, to]]) }, before);
   const changed = drawing.wires.filter(({ id }) => before.routes.get(id) !== after.routes.get(id));
   expect(changed.length).toBeGreaterThan(0);
   for (const { from, to: end } of changed) expect([from.part, end.part]).toContain(moved.id);

@@ -1,6 +1,7 @@
 import { expect, test } from 'vitest';
 import type { WireEnd } from '#shared/circuit/drawing';
-import { layOut } from '../../../src/features/canvas/sheet-geometry';
+import { findNets } from '#shared/circuit/nets';
+import { layOut, NOTHING_IN_HAND } from '../../../src/features/canvas/sheet-geometry';
 import { targetAt } from '../../../src/features/canvas/wire-target';
 import { drawingWith, drawn, wired } from '../../support/draw';
 
@@ -12,7 +13,8 @@ const [a, b, c] = [
 ];
 const wire = wired('w', 'a.b', 'b.a');
 const drawing = drawingWith([a, b, c], [wire]);
-const geometry = layOut(drawing, new Map(), undefined);
+const nets = findNets(drawing);
+const geometry = layOut(drawing, nets, NOTHING_IN_HAND, undefined);
 const from: WireEnd = { part: c.id, pin: 'a' };
 
 test('the free end takes the terminal it is near, before the wire that ends there', () => {
