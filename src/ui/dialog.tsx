@@ -7,11 +7,13 @@ interface DialogProps {
   readonly onOpenChange: (open: boolean) => void;
   readonly title: string;
   readonly description?: ReactNode;
+  /** Where the focus goes on closing, where that is not where it was. */
+  readonly focusAfter?: () => HTMLElement | null | undefined;
   readonly children: ReactNode;
 }
 
-/** A card over the page; Escape, the cross and a click beside it close it, and the focus returns to where it was. */
-export function Dialog({ open, onOpenChange, title, description, children }: DialogProps) {
+/** A card over the page; Escape, the cross and a click beside it close it, and the focus returns to where it was, or goes where it is sent. */
+export function Dialog({ open, onOpenChange, title, description, focusAfter, children }: DialogProps) {
   const opener = useRef<Element | null>(null);
   return (
     <Primitive.Root open={open} onOpenChange={onOpenChange}>
@@ -26,7 +28,8 @@ export function Dialog({ open, onOpenChange, title, description, children }: Dia
           // The primitive gives the focus back to a trigger of its own only, and ours is wherever the reader was.
           onCloseAutoFocus={(event) => {
             event.preventDefault();
-            if (opener.current instanceof HTMLElement) opener.current.focus();
+            const to = focusAfter?.() ?? opener.current;
+            if (to instanceof HTMLElement) to.focus({ preventScroll: true });
           }}
           {...(description === undefined ? { 'aria-describedby': undefined } : {})}
         >

@@ -1,14 +1,5 @@
-import {
-  type MouseEvent,
-  type PointerEvent,
-  useCallback,
-  useEffect,
-  useLayoutEffect,
-  useMemo,
-  useRef,
-  useState,
-} from 'react';
-import { ReactFlowProvider, useStoreApi } from 'reactflow';
+import { useCallback, useEffect, useLayoutEffect, useMemo, useRef, useState } from 'react';
+import { ReactFlowProvider } from 'reactflow';
 import type { PartId, WireEnd } from '#shared/circuit/drawing';
 import { terminalKey } from '#shared/circuit/nets';
 import type { GridPoint } from '#shared/geometry/place';
@@ -17,25 +8,34 @@ import { type CanvasParts, CanvasPartsProvider } from './canvas-context';
 import type { CanvasProps } from './canvas-props';
 import type { Desk } from './desk';
 import { asWireId, useFlowElements } from './flow-elements';
+import { boxOf, type Found, selectionOf } from './found-things';
 import { HandMarks } from './hand-marks';
 import { hintFor } from './hint';
 import { handleKey, handleKeyUp } from './keyboard';
-import { KeysDialog, useKeysDialog } from './keys-dialog';
 import { litNet } from './lit-net';
 import { Marks } from './marks';
 import { NetMarks } from './net-marks';
-import { spokenPart } from './part-text';
+import { Panels } from './panels';
+import { hasSlip } from './part-keys';
 import { pressWire } from './press-wire';
 import { SheetFlow } from './sheet-flow';
 import type { SheetGeometry } from './sheet-geometry';
 import { SlipOverlay } from './slip-overlay';
 import { partBox } from './symbol-box';
 import { Tray } from './tray';
+import { useArrivals } from './use-arrivals';
 import { useBending } from './use-bending';
+import { useBoardPointer } from './use-board-pointer';
+import { useClipboard } from './use-clipboard';
 import { useFlowChanges } from './use-flow-changes';
 import { useLatest } from './use-latest';
+import { useMarquee } from './use-marquee';
 import { useMoving } from './use-moving';
+import { menuPlace, usePanels } from './use-panels';
 import { usePlacing } from './use-placing';
+import { useQuietStrictMode } from './use-quiet-strict-mode';
+import { useSaid } from './use-said';
+import { useSeveral } from './use-several';
 import { useSheetPicture } from './use-sheet-picture';
 import { useView } from './use-view';
 import { useWiring } from './use-wiring';
@@ -57,11 +57,13 @@ function Board(props: CanvasProps) {
   const { drawing, nets, commands, selection, onSelect, announce, slip, slipPart, frame } = props;
   const { Tag, PartProblem, NetVoltage, useRegion = unknownRegion } = props;
   const [voltages, setVoltages] = useState(true);
-  const keys = useKeysDialog();
+  const panels = usePanels();
+  const { said, say, hush } = useSaid(announce);
   const [hovered, setHovered] = useState<string>();
   const board = useRef<HTMLElement>(null);
   const pointer = useRef<GridPoint>(undefined);
   const selectedAtPress = useRef(selection);
+  const { several, setSeveral } = useSeveral(board);
   const view = useView();
   useQuietStrictMode();
 
@@ -75,21 +77,23 @@ function Board(props: CanvasProps) {
   }, [geometry]);
   const latestPicture = useLatest({ geometry, texts });
 
-  const placed = useRef<PartId>(undefined);
-  const onPlaced = (part: PartId) => {
-    placed.current = part;
-    onSelect({ parts: new Set([part]), wires: new Set() });
-  };
-  const { placing, hands: placingHands } = usePlacing(commands, announce, onPlaced);
-  useEffect(() => {
-    const part = placed.current && geometry.parts.get(placed.current);
-    if (!part) return;
-    placed.current = undefined;
-    announce(`Placed ${spokenPart(part)} at ${part.place.x}, ${part.place.y}.`);
-  }, [geometry, announce]);
+  const arrivals = useArrivals({
+    geometry,
+    view,
+    select: onSelect,
+    announce,
+    onSetDown({ id, kind }) {
+      // One writes a note at once, and seldom two.
+      if (kind === 'note' && placingHands.end()) props.onOpenSlip(id);
+    },
+  });
+  const { placing, hands: placingHands } = usePlacing(commands, announce, (part) =>
+    arrivals.setDown({ parts: new Set([part]), wires: new Set() }),
+  );
 
   const sheet = { drawing, geometry, nets, commands, announce, toSheet: view.toSheet };
   const { wiring, hands: wiringHands } = useWiring(sheet);
+  const { marquee, hands: marqueeHands } = useMarquee({ ...sheet, selection, select: onSelect });
 
   const parts = useMemo(
     (): CanvasParts => ({
@@ -128,6 +132,7 @@ function Board(props: CanvasProps) {
     return part && { x: part.place.x + 100, y: part.place.y };
   };
   const desk: Desk = {
+    drawing,
     geometry,
     commands,
     selection,
@@ -135,6 +140,7 @@ function Board(props: CanvasProps) {
       return selectedAtPress.current;
     },
     moving,
+    marquee: marqueeHands,
     bending,
     placing: placingHands,
     wiring: wiringHands,
@@ -149,6 +155,8 @@ function Board(props: CanvasProps) {
     spokenWire: (id) => edges.find((edge) => edge.id === id)?.ariaLabel ?? 'Wire',
     select: onSelect,
     placingStart: () => pointer.current ?? middleOfSelected() ?? view.middle(),
+    pointerOrMiddle: () => pointer.current ?? view.middle(),
+    arrived: arrivals.copied,
     focusPart(id) {
       reveal(id);
       focus(`[data-part="${id}"]`);
@@ -159,18 +167,20 @@ function Board(props: CanvasProps) {
     },
     focusDrawing,
     openSlip: (id) => {
-      const kind = geometry.parts.get(id)?.kind;
-      if (kind !== undefined && kind !== 'ground' && kind !== 'junction') props.onOpenSlip(id);
+      const part = geometry.parts.get(id);
+      if (part && hasSlip(part)) props.onOpenSlip(id);
     },
     closeSlip() {
       props.onCloseSlip();
       if (slipPart !== undefined) focus(`[data-part="${slipPart}"]`);
     },
-    showKeys: keys.show,
+    show: (panel, at) => panels.show(panel, at ?? menuPlace(board.current, selection)),
     announce,
+    say,
   };
   const latestDesk = useLatest(desk);
   const changes = useFlowChanges(latestDesk);
+  useClipboard(board, latestDesk);
 
   // biome-ignore lint/correctness/useExhaustiveDependencies: only a new request frames again, not a part that moved
   useEffect(() => {
@@ -183,30 +193,24 @@ function Board(props: CanvasProps) {
     view.fit(geometry, texts);
   }, [view, latestPicture]);
 
-  const onPointerMove = (event: PointerEvent) => {
-    const at = view.toSheet({ x: event.clientX, y: event.clientY });
-    pointer.current = at;
-    props.onPointer?.(at);
-    placingHands.follow(at);
-    if (!wiring?.held) wiringHands.follow(at);
-  };
-  const onPointerLeave = () => {
-    pointer.current = undefined;
-    props.onPointer?.(undefined);
-  };
-  /** While something is in the hand, a click anywhere on the sheet is about that alone. */
-  const onClickCapture = (event: MouseEvent) => {
-    if (event.target instanceof Element && event.target.closest('[data-own-keys]')) return;
-    const at = view.toSheet({ x: event.clientX, y: event.clientY });
-    const meaning = wiringHands.meaningOfClick();
-    if (placingHands.now()) {
-      placingHands.follow(at);
-      placingHands.put();
-    } else if (meaning === 'ties') {
-      wiringHands.follow(at);
-      wiringHands.tie();
-    } else if (meaning === 'not-ours') return;
-    event.stopPropagation();
+  const { spaceWasTap, handlers } = useBoardPointer({
+    desk,
+    view,
+    pointer,
+    several,
+    hush,
+    onPress() {
+      selectedAtPress.current = selection;
+    },
+    onPointer: props.onPointer,
+  });
+  const goTo = (found: Found): HTMLElement | null => {
+    const selection = selectionOf(found, drawing, nets);
+    onSelect(selection);
+    const box = boxOf(selection, geometry);
+    if (box) view.frame(box);
+    const [part] = selection.parts;
+    return board.current?.querySelector<HTMLElement>(`[data-part="${part}"]`) ?? board.current;
   };
 
   const slipOn = slipPart === undefined ? undefined : geometry.parts.get(slipPart);
@@ -223,14 +227,8 @@ function Board(props: CanvasProps) {
         data-wiring={wiring !== undefined || undefined}
         data-placing={placing !== undefined || undefined}
         onKeyDown={(event) => handleKey(event, desk)}
-        onKeyUp={(event) => handleKeyUp(event, desk)}
-        onPointerDownCapture={() => {
-          selectedAtPress.current = selection;
-          wiringHands.newPress();
-        }}
-        onPointerMove={onPointerMove}
-        onPointerLeave={onPointerLeave}
-        onClickCapture={onClickCapture}
+        onKeyUp={(event) => handleKeyUp(event, desk, spaceWasTap())}
+        {...handlers}
       >
         <CanvasPartsProvider value={parts}>
           <SheetFlow
@@ -246,8 +244,13 @@ function Board(props: CanvasProps) {
         </CanvasPartsProvider>
         <NetMarks dots={graph.dots} spots={texts.spots} lit={lit} voltages={voltages} NetVoltage={NetVoltage} />
         <ViewportLayer>
-          <Marks geometry={geometry} selected={selection.parts} lit={props.lit} others={props.others} />
-          <HandMarks placing={placing} wiring={wiring} geometry={geometry} />
+          <Marks
+            geometry={geometry}
+            selected={(marquee?.selection ?? selection).parts}
+            lit={props.lit}
+            others={props.others}
+          />
+          <HandMarks placing={placing} wiring={wiring} marquee={marquee} geometry={geometry} />
         </ViewportLayer>
         <ViewSharing followed={props.followed} onView={props.onView} onLeave={props.onLeaveFollowed} />
         {slip !== undefined && slipOn && (
@@ -264,39 +267,33 @@ function Board(props: CanvasProps) {
       <Tray
         canEdit={commands.canEdit}
         inHand={placing?.kind}
-        hint={hintFor(placing, wiring, geometry)}
+        hint={hintFor(placing, wiring, geometry, said)}
         voltages={voltages}
         onVoltages={setVoltages}
         onFit={fit}
-        onKeys={keys.show}
+        several={several}
+        onSeveral={setSeveral}
+        onFind={() => desk.show('find')}
+        onActions={(at) => desk.show('actions', at)}
+        onKeys={() => desk.show('keys')}
         onTake={(kind) => {
           if (placing?.kind === kind) placingHands.end();
           else placingHands.begin(kind, view.middle());
           focusDrawing();
         }}
-        onDrag={(kind, at) => {
-          if (placingHands.now()?.kind !== kind) placingHands.begin(kind, view.toSheet(at));
+        onDrag={(kind, at, begins) => {
+          if (begins) placingHands.begin(kind, view.toSheet(at));
+          // The keys are the drawing's from here: Escape calls it off.
+          if (begins) focusDrawing();
           placingHands.follow(view.toSheet(at));
         }}
-        onDragEnd={({ x, y }) => {
-          if (board.current?.contains(document.elementFromPoint(x, y))) placingHands.put();
+        onDragEnd={(at) => {
+          if (at && board.current?.contains(document.elementFromPoint(at.x, at.y))) placingHands.put();
           placingHands.end();
           focusDrawing();
         }}
       />
-      <KeysDialog open={keys.shown} onOpenChange={keys.onOpenChange} />
+      <Panels panel={panels.panel} at={panels.at} desk={desk} nets={nets} onClose={panels.close} goTo={goTo} />
     </div>
-  );
-}
-
-/** React's StrictMode makes React Flow v11 believe, in development, that its constants are made anew (warning 002). */
-function useQuietStrictMode() {
-  const store = useStoreApi();
-  useState(() =>
-    store.setState({
-      onError: (code, message) => {
-        if (code !== '002') console.warn(message);
-      },
-    }),
   );
 }

@@ -3,6 +3,7 @@ import { snap } from '#shared/geometry/place';
 import { routeWire } from '#shared/geometry/route-wire';
 import type { SheetGeometry } from './sheet-geometry';
 import { orientation, PartSymbol } from './symbols';
+import type { Marquee } from './use-marquee';
 import type { Placing } from './use-placing';
 import type { Wiring } from './use-wiring';
 import { pathOf } from './wire-edge';
@@ -10,11 +11,12 @@ import { pathOf } from './wire-edge';
 type HandMarksProps = {
   readonly placing: Placing | undefined;
   readonly wiring: Wiring | undefined;
+  readonly marquee: Marquee | undefined;
   readonly geometry: SheetGeometry;
 };
 
-/** What is in the hand and not yet on the sheet: a part to place, a wire with one end. */
-export function HandMarks({ placing, wiring, geometry }: HandMarksProps) {
+/** What is in the hand and not yet on the sheet: a part to place, a wire with one end, a frame about parts. */
+export function HandMarks({ placing, wiring, marquee, geometry }: HandMarksProps) {
   return (
     <svg className="hand" width="1" height="1" aria-hidden="true">
       {placing && (
@@ -26,9 +28,14 @@ export function HandMarks({ placing, wiring, geometry }: HandMarksProps) {
           <PartSymbol kind={placing.kind} />
         </g>
       )}
+      {marquee && <Frame {...marquee} />}
       {wiring && <WireInHand wiring={wiring} geometry={geometry} />}
     </svg>
   );
+}
+
+function Frame({ box: { left, top, right, bottom } }: Marquee) {
+  return <rect className="marquee" x={left} y={top} width={right - left} height={bottom - top} />;
 }
 
 function WireInHand({ wiring: { from, at, target }, geometry }: { wiring: Wiring; geometry: SheetGeometry }) {

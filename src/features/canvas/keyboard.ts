@@ -3,9 +3,10 @@ import { CATALOGUE } from '#shared/circuit/catalogue';
 import { terminalKey } from '#shared/circuit/nets';
 import { GRID } from '#shared/geometry/place';
 import { NOTHING_SELECTED } from '../../live/selection';
+import { actByKey } from './actions';
 import { ARROWS, type Desk, selectedParts } from './desk';
 import { asPartId } from './flow-elements';
-import { moveSelected, partKey, walkParts } from './part-keys';
+import { moveSelected, partKey, toggleFocused, walkParts } from './part-keys';
 import { type ShownTerminal, terminalsOf } from './sheet-geometry';
 import { nextInDirection, nextInRing } from './walk';
 import { aimAtNextWire, pushSelectedWire, selectNextWire } from './wire-keys';
@@ -26,20 +27,31 @@ export function handleKey(event: KeyboardEvent, desk: Desk): void {
   const altGraph = event.getModifierState('AltGraph');
   const acted =
     !altGraph && (event.ctrlKey || event.metaKey)
-      ? handleHistory(event, desk)
+      ? handleCommand(event, desk)
       : (altGraph || !event.altKey) && handlePlain(event, desk);
   if (acted) event.preventDefault();
 }
 
-/** A held arrow moves on; letting go of it drops the part, so that one press is one undo step. */
-export function handleKeyUp(event: KeyboardEvent, desk: Desk): void {
+/**
+ * A held arrow moves on; letting go of it drops the part, so that one press is one undo step. Space selects when it is
+ * let go of, for while it is held the pointer moves the sheet (`wasTap`: it did not).
+ */
+export function handleKeyUp(event: KeyboardEvent, desk: Desk, wasTap: boolean): void {
+  if (event.key === ' ' && wasTap && !hasOwnKeys(event) && !isBusy(desk)) toggleFocused(event, desk);
   if (event.key in ARROWS || event.key === 'Shift') {
     desk.moving.drop();
     desk.bending.drop();
   }
 }
 
-function handleHistory(event: KeyboardEvent, { commands, announce }: Desk): boolean {
+function isBusy({ placing, wiring }: Desk): boolean {
+  return placing.now() !== undefined || wiring.now() !== undefined;
+}
+
+function handleCommand(event: KeyboardEvent, desk: Desk): boolean {
+  const { commands, announce } = desk;
+  const arrow = ARROWS[event.key];
+  if (arrow && !event.shiftKey && !isBusy(desk)) return walkParts(arrow, event, desk);
   const key = event.key.toLowerCase();
   if (key === 'z' && !event.shiftKey) {
     announce(commands.canUndo ? 'Undone.' : 'There is nothing of yours to undo.');
@@ -47,14 +59,14 @@ function handleHistory(event: KeyboardEvent, { commands, announce }: Desk): bool
   } else if (key === 'y' || key === 'z') {
     announce(commands.canRedo ? 'Redone.' : 'There is nothing to redo.');
     commands.redo();
-  } else return false;
+  } else return !isBusy(desk) && actByKey(event, desk);
   return true;
 }
 
 function handlePlain(event: KeyboardEvent, desk: Desk): boolean {
   const { key } = event;
   if (key === '?') {
-    desk.showKeys();
+    desk.show('keys');
     return true;
   }
   if (key === 'Escape') return letGo(event, desk);
@@ -70,9 +82,15 @@ function handlePlain(event: KeyboardEvent, desk: Desk): boolean {
   const terminal = focusedTerminal(event, desk);
   if (desk.wiring.now()) return wiringKey(event, desk, terminal);
   if (arrow && event.shiftKey) return pushSelectedWire(arrow, desk) || moveSelected(arrow, desk);
+  if (key === 'a') {
+    desk.show('actions');
+    return true;
+  }
+  if (actByKey(event, desk)) return true;
   if (terminal) return terminalKeyPressed(event, desk, terminal);
   if (arrow) return walkParts(arrow, event, desk);
-  return partKey(event, desk);
+  // Else it would scroll the page.
+  return key === ' ' || partKey(event, desk);
 }
 
 function placingKey(event: KeyboardEvent, { placing }: Desk): boolean {
@@ -157,7 +175,7 @@ function nextTerminal(
 
 /** One thing after another is let go of, the nearest to the hand first. */
 function letGo(event: KeyboardEvent, desk: Desk): boolean {
-  if (desk.moving.abort() || desk.bending.abort() || desk.wiring.abort()) return true;
+  if (desk.moving.abort() || desk.bending.abort() || desk.marquee.abort() || desk.wiring.abort()) return true;
   if (desk.placing.end()) {
     const [placed] = selectedParts(desk);
     if (placed) desk.focusPart(placed.id);

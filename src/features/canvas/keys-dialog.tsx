@@ -1,62 +1,69 @@
-import { useEffect, useRef, useState } from 'react';
+import { Fragment } from 'react';
 import { CATALOGUE } from '#shared/circuit/catalogue';
 import { Dialog } from '../../ui/dialog';
+import { ACTIONS } from './actions';
 
-const KEYS: readonly (readonly [keys: string, does: string])[] = [
+type KeyRow = readonly [keys: string, does: string];
+
+const BY_KEYS: readonly KeyRow[] = [
   ['arrows', 'next part or terminal; move what is being placed'],
+  ['Ctrl arrows', 'next part, the selection stays'],
+  ['Space', 'take the part into the selection, or out of it'],
   ['Shift arrows', 'move the selected parts'],
-  ['Enter', 'open a part’s slip; place; begin a wire at a terminal, tie it'],
+  ['Enter', 'open the slip; place; begin a wire at a terminal, tie it'],
   ['. ,', 'next and previous terminal'],
-  ['[ ]', 'turn left, turn right'],
-  ['=', 'mirror left for right'],
-  ['Delete', 'remove what is selected; at a terminal, its wires'],
+  ['Backspace', 'remove too; at a terminal, its wires'],
   ['Ctrl Z', 'undo what you did last'],
   ['Ctrl Y', 'redo it'],
-  ['Escape', 'let go: of the move, the wire, the part, the slip'],
+  ['Escape', 'let go: of the move, the frame, the wire, the part, the slip'],
+  ['a', 'all actions; a click with the other button does too'],
   ['?', 'these keys'],
 ];
 
+const BY_POINTER: readonly KeyRow[] = [
+  ['click', 'select; a second click opens the slip'],
+  ['Shift click', 'take into the selection, or out of it'],
+  ['drag', 'frame parts on the empty sheet; move parts; draw a wire from a terminal'],
+  ['Space drag', 'move the sheet; so does the middle button, or one finger'],
+  ['wheel', 'zoom; so do two fingers'],
+];
+
 /** The keys that act while the drawing has the focus. */
-export function KeysDialog({ open, onOpenChange }: { open: boolean; onOpenChange(open: boolean): void }) {
+export function KeysDialog({ open, onClose }: { open: boolean; onClose(): void }) {
   return (
     <Dialog
       open={open}
-      onOpenChange={onOpenChange}
+      onOpenChange={(next) => !next && onClose()}
       title="Keys"
       description="They act while the drawing has the focus."
     >
-      <dl className="grid grid-cols-[auto_1fr] gap-x-6 gap-y-0.5 text-xs">
-        {KEYS.map(([keys, does]) => (
-          <Row key={keys} keys={keys} does={does} />
-        ))}
-        {CATALOGUE.map(({ letter, label }) => letter && <Row key={letter} keys={letter} does={`place: ${label}`} />)}
-      </dl>
+      <Rows title="to move about and to draw" rows={BY_KEYS} />
+      <Rows title="what is selected" rows={ACTIONS.flat().map(({ keys, label }) => [keys, lowered(label)])} />
+      <Rows
+        title="to place"
+        rows={CATALOGUE.flatMap(({ letter, label }) => (letter === undefined ? [] : [[letter, label]]))}
+      />
+      <Rows title="by pointer" rows={BY_POINTER} />
     </Dialog>
   );
 }
 
-/** The dialog was opened by a key, so it has no button to give the focus back to: it goes to where it was. */
-export function useKeysDialog() {
-  const [shown, setShown] = useState(false);
-  const before = useRef<HTMLElement>(null);
-  useEffect(() => {
-    if (!shown) before.current?.focus({ preventScroll: true });
-  }, [shown]);
-  return {
-    shown,
-    show() {
-      before.current = document.activeElement instanceof HTMLElement ? document.activeElement : null;
-      setShown(true);
-    },
-    onOpenChange: setShown,
-  };
+function Rows({ title, rows }: { title: string; rows: readonly KeyRow[] }) {
+  return (
+    <section className="mb-4">
+      <h3 className="mb-1 text-faint text-xs">{title}</h3>
+      <dl className="grid grid-cols-[7rem_1fr] gap-x-4 gap-y-0.5 text-xs">
+        {rows.map(([keys, does]) => (
+          <Fragment key={`${keys} ${does}`}>
+            <dt className="font-bold">{keys}</dt>
+            <dd>{does}</dd>
+          </Fragment>
+        ))}
+      </dl>
+    </section>
+  );
 }
 
-function Row({ keys, does }: { keys: string; does: string }) {
-  return (
-    <>
-      <dt className="font-bold">{keys}</dt>
-      <dd>{does}</dd>
-    </>
-  );
+function lowered(label: string): string {
+  return label.charAt(0).toLowerCase() + label.slice(1);
 }

@@ -1,6 +1,6 @@
 import type { KeyboardEvent } from 'react';
 import { type DrawnPart, isComponent } from '#shared/circuit/drawing';
-import { GRID, type GridPoint, mirrored, turned } from '#shared/geometry/place';
+import { GRID, type GridPoint, mirrored, type Place, turned } from '#shared/geometry/place';
 import { NOTHING_SELECTED } from '../../live/selection';
 import { type Desk, selectedParts } from './desk';
 import { asPartId } from './flow-elements';
@@ -9,6 +9,7 @@ import { terminalsOf } from './sheet-geometry';
 import { partBox } from './symbol-box';
 import { nextInDirection } from './walk';
 
+/** To the next part that way, which is then the one selected; with the command key the selection stays. */
 export function walkParts(arrow: GridPoint, event: KeyboardEvent, desk: Desk): boolean {
   const parts = [...desk.geometry.parts.values()];
   const here = currentPart(event, desk);
@@ -17,7 +18,7 @@ export function walkParts(arrow: GridPoint, event: KeyboardEvent, desk: Desk): b
     : parts.sort((a, b) => a.place.y - b.place.y || a.place.x - b.place.x)[0];
   const to = next ?? here;
   if (to) {
-    desk.select({ parts: new Set([to.id]), wires: new Set() });
+    if (!event.ctrlKey && !event.metaKey) desk.select({ parts: new Set([to.id]), wires: new Set() });
     desk.focusPart(to.id);
   }
   return true;
@@ -35,14 +36,9 @@ export function moveSelected(arrow: GridPoint, desk: Desk): boolean {
 export function partKey(event: KeyboardEvent, desk: Desk): boolean {
   const { key } = event;
   const here = currentPart(event, desk);
-  const selected = selectedParts(desk);
   switch (key) {
     case 'Enter':
-    case ' ':
-      if (!here) return false;
-      desk.select({ parts: new Set([here.id]), wires: new Set() });
-      desk.openSlip(here.id);
-      return true;
+      return openSlipAt(here, desk);
     case '.':
     case ',': {
       const [first] = here ? terminalsOf(desk.geometry, here.id) : [];
@@ -50,28 +46,63 @@ export function partKey(event: KeyboardEvent, desk: Desk): boolean {
       return first !== undefined;
     }
     case '[':
+      return turnSelected(desk, -1);
     case ']':
-    case '=': {
-      if (!desk.commands.canEdit || selected.length === 0) return false;
-      const quarters = key === '[' ? -1 : 1;
-      desk.commands.placeParts(
-        new Map(selected.map(({ id, place }) => [id, key === '=' ? mirrored(place) : turned(place, quarters)])),
-      );
-      const [first] = selected;
-      const what = selected.length === 1 && first ? shortPart(first) : `${selected.length} parts`;
-      desk.announce(`${key === '=' ? 'Mirrored' : 'Turned'} ${what}.`);
-      return true;
-    }
+      return turnSelected(desk, 1);
+    case '=':
+      return mirrorSelected(desk);
     case 'Delete':
     case 'Backspace':
-      return removeSelected(desk, selected);
+      return removeSelected(desk);
     default:
       return false;
   }
 }
 
-function removeSelected(desk: Desk, selected: readonly DrawnPart[]): boolean {
+/** The slip of the part with the focus, or of all that are selected where it is one of them. */
+function openSlipAt(here: DrawnPart | undefined, desk: Desk): boolean {
+  const part = here ?? selectedParts(desk).find(hasSlip);
+  if (!part) return false;
+  if (!desk.selection.parts.has(part.id)) desk.select({ parts: new Set([part.id]), wires: new Set() });
+  desk.openSlip(part.id);
+  return true;
+}
+
+/** Takes the part with the focus into the selection, or out of it. */
+export function toggleFocused(event: KeyboardEvent, desk: Desk): void {
+  const here = focusedPart(event, desk);
+  if (!here) return;
+  const parts = new Set(desk.selection.parts);
+  const taken = parts.delete(here.id);
+  if (!taken) parts.add(here.id);
+  desk.select({ parts, wires: desk.selection.wires });
+  desk.announce(`${shortPart(here)} ${taken ? 'is no longer selected' : 'is selected too'}: ${parts.size} in all.`);
+}
+
+export function hasSlip({ kind }: DrawnPart): boolean {
+  return kind !== 'ground' && kind !== 'junction';
+}
+
+export function turnSelected(desk: Desk, quarters: 1 | -1): boolean {
+  return placeSelected(desk, 'Turned', (place) => turned(place, quarters));
+}
+
+export function mirrorSelected(desk: Desk): boolean {
+  return placeSelected(desk, 'Mirrored', mirrored);
+}
+
+function placeSelected(desk: Desk, done: string, to: (place: Place) => Place): boolean {
+  const selected = selectedParts(desk);
+  const [first] = selected;
+  if (!desk.commands.canEdit || !first) return false;
+  desk.commands.placeParts(new Map(selected.map(({ id, place }) => [id, to(place)])));
+  desk.announce(`${done} ${selected.length === 1 ? shortPart(first) : `${selected.length} parts`}.`);
+  return true;
+}
+
+export function removeSelected(desk: Desk): boolean {
   const { commands, selection } = desk;
+  const selected = selectedParts(desk);
   if (!commands.canEdit || selected.length + selection.wires.size === 0) return false;
   commands.remove(selection.parts, selection.wires);
   desk.select(NOTHING_SELECTED);
@@ -88,12 +119,15 @@ function removeSelected(desk: Desk, selected: readonly DrawnPart[]): boolean {
 }
 
 /** The part that has the focus, else the only one that is selected. */
-function currentPart({ target }: KeyboardEvent, desk: Desk): DrawnPart | undefined {
-  const element = target instanceof Element ? target.closest<HTMLElement>('[data-part]') : null;
-  const focused = element?.dataset.part;
-  if (focused !== undefined) return desk.geometry.parts.get(asPartId(focused));
+function currentPart(event: KeyboardEvent, desk: Desk): DrawnPart | undefined {
   const selected = selectedParts(desk);
-  return selected.length === 1 ? selected[0] : undefined;
+  return focusedPart(event, desk) ?? (selected.length === 1 ? selected[0] : undefined);
+}
+
+function focusedPart({ target }: KeyboardEvent, { geometry }: Desk): DrawnPart | undefined {
+  const element = target instanceof Element ? target.closest<HTMLElement>('[data-part]') : null;
+  const id = element?.dataset.part;
+  return id === undefined ? undefined : geometry.parts.get(asPartId(id));
 }
 
 function middleOf(part: DrawnPart): GridPoint {

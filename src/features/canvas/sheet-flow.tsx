@@ -16,6 +16,8 @@ import { WireEdge } from './wire-edge';
 const NODE_TYPES = { part: PartNode };
 const EDGE_TYPES = { wire: WireEdge };
 const SNAP_GRID: [number, number] = [GRID, GRID];
+/** The middle button; a mouse's first one frames parts, a finger always moves the sheet. */
+const PAN_BUTTONS = [1];
 const MULTI_SELECT = ['Shift', 'Control', 'Meta'];
 const NO_ATTRIBUTION = { hideAttribution: true };
 
@@ -64,7 +66,8 @@ export const SheetFlow = memo(function SheetFlow(props: SheetFlowProps) {
       disableKeyboardA11y
       deleteKeyCode={null}
       selectionKeyCode={null}
-      panActivationKeyCode={null}
+      panOnDrag={PAN_BUTTONS}
+      panActivationKeyCode="Space"
       multiSelectionKeyCode={MULTI_SELECT}
       elevateNodesOnSelect={false}
       zoomOnDoubleClick={false}

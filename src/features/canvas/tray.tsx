@@ -1,4 +1,4 @@
-import { CircleQuestionMark, Maximize } from 'lucide-react';
+import { CircleQuestionMark, Ellipsis, Maximize, Search } from 'lucide-react';
 import { type PointerEvent as ReactPointerEvent, useRef } from 'react';
 import { useViewport } from 'reactflow';
 import { CATALOGUE, type CatalogueEntry } from '#shared/circuit/catalogue';
@@ -15,18 +15,25 @@ type TrayProps = {
   readonly hint: string;
   readonly voltages: boolean;
   onVoltages(shown: boolean): void;
+  /** Clicks add to the selection and take from it, and any drag on the empty sheet frames. */
+  readonly several: boolean;
+  onSeveral(several: boolean): void;
+  onFind(): void;
+  /** Opens the menu of all that can be done, at a place of the window. */
+  onActions(at: GridPoint): void;
   onFit(): void;
   onKeys(): void;
   /** Takes a part, or puts it away when it is the one in the hand. */
   onTake(kind: DrawnKind): void;
-  /** A part is dragged out of the tray; places are the window's. */
-  onDrag(kind: DrawnKind, at: GridPoint): void;
-  onDragEnd(at: GridPoint): void;
+  /** A part is dragged out of the tray (`begins`: it leaves it); places are the window's. */
+  onDrag(kind: DrawnKind, at: GridPoint, begins: boolean): void;
+  /** Where it was let go of; undefined where the drag was called off. */
+  onDragEnd(at: GridPoint | undefined): void;
 };
 
 /** The strip along the drawing's lower edge: parts to place, and how the drawing is shown. */
 export function Tray(props: TrayProps) {
-  const { canEdit, inHand, hint, voltages } = props;
+  const { canEdit, inHand, hint, voltages, several } = props;
   return (
     <div className="tray">
       {canEdit && (
@@ -38,6 +45,26 @@ export function Tray(props: TrayProps) {
       )}
       <p className="tray-hint">{hint}</p>
       <div className="tray-view">
+        <label className="tray-toggle" title="Clicks add to the selection; a drag frames parts">
+          <input type="checkbox" checked={several} onChange={(event) => props.onSeveral(event.target.checked)} />
+          several
+        </label>
+        <button
+          type="button"
+          className="tray-button"
+          aria-label="Actions"
+          aria-haspopup="menu"
+          title="Actions (a)"
+          onClick={(event) => {
+            const { left, top } = event.currentTarget.getBoundingClientRect();
+            props.onActions({ x: left, y: top });
+          }}
+        >
+          <Ellipsis size={16} strokeWidth={1.5} aria-hidden />
+        </button>
+        <button type="button" className="tray-button" aria-label="Find" title="Find (f)" onClick={props.onFind}>
+          <Search size={15} strokeWidth={1.5} aria-hidden />
+        </button>
         <label className="tray-toggle">
           <input type="checkbox" checked={voltages} onChange={(event) => props.onVoltages(event.target.checked)} />
           voltages
@@ -47,7 +74,7 @@ export function Tray(props: TrayProps) {
           <Zoom />
           <span className="sr-only">, show the whole drawing</span>
         </button>
-        <button type="button" className="tray-button" onClick={props.onKeys} aria-label="Keys" title="Keys">
+        <button type="button" className="tray-button" onClick={props.onKeys} aria-label="Keys" title="Keys (?)">
           <CircleQuestionMark size={16} strokeWidth={1.5} aria-hidden />
         </button>
       </div>
@@ -74,14 +101,18 @@ function TrayPart({ entry: { kind, label, letter }, taken, onTake, onDrag, onDra
     // Kept while it moves, so that a touch is heard outside the tray too.
     button.setPointerCapture(down.pointerId);
     const onMove = (event: PointerEvent) => {
-      if (Math.hypot(event.clientX - down.clientX, event.clientY - down.clientY) > DRAG_SLOP) dragged.current = true;
-      if (dragged.current) onDrag(kind, { x: event.clientX, y: event.clientY });
+      const begins = !dragged.current;
+      if (begins && Math.hypot(event.clientX - down.clientX, event.clientY - down.clientY) <= DRAG_SLOP) return;
+      dragged.current = true;
+      onDrag(kind, { x: event.clientX, y: event.clientY }, begins);
     };
     const onEnd = (event: PointerEvent) => {
       button.removeEventListener('pointermove', onMove);
       button.removeEventListener('pointerup', onEnd);
       button.removeEventListener('pointercancel', onEnd);
-      if (dragged.current) onDragEnd({ x: event.clientX, y: event.clientY });
+      // A touch that turns out to scroll the tray is called off.
+      const at = event.type === 'pointerup' ? { x: event.clientX, y: event.clientY } : undefined;
+      if (dragged.current) onDragEnd(at);
     };
     button.addEventListener('pointermove', onMove);
     button.addEventListener('pointerup', onEnd);

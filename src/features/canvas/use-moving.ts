@@ -1,6 +1,7 @@
 import { useMemo, useRef, useState } from 'react';
 import type { Drawing, PartId } from '#shared/circuit/drawing';
-import type { Place } from '#shared/geometry/place';
+import { enclosedJunctions } from '#shared/circuit/enclosed-junctions';
+import { type Place, samePoint } from '#shared/geometry/place';
 import type { SheetCommands } from '../../live/sheet-commands';
 import { shortPart } from './part-text';
 import { samePlace } from './sheet-geometry';
@@ -40,7 +41,7 @@ export function useMoving(
         aborted.current = false;
       },
       show(places) {
-        if (!aborted.current) set(new Map([...shown.current, ...places]));
+        if (!aborted.current) set(withJunctions(new Map([...shown.current, ...places]), latest.current.drawing));
       },
       drop() {
         const places = shown.current;
@@ -70,4 +71,20 @@ export function useMoving(
     };
   }, [latest]);
   return { elsewhere, hands };
+}
+
+/** Junctions that only join parts that go the same way go along, or the wires between those would be left behind. */
+function withJunctions(places: Places, drawing: Drawing): Places {
+  if (places.size < 2) return places;
+  const shifts = drawing.parts.flatMap(({ id, place }) => {
+    const to = places.get(id);
+    return to ? [{ x: to.x - place.x, y: to.y - place.y }] : [];
+  });
+  const [by] = shifts;
+  if (!by || !shifts.every((shift) => samePoint(shift, by))) return places;
+  const junctions = enclosedJunctions(drawing, new Set(places.keys()));
+  const along = drawing.parts
+    .filter(({ id }) => junctions.has(id))
+    .map(({ id, place }) => [id, { ...place, x: place.x + by.x, y: place.y + by.y }] as const);
+  return new Map([...places, ...along]);
 }
