@@ -18,7 +18,11 @@ export type OtherPerson = {
   readonly selection: ReadonlySet<PartId>;
   readonly pointer: GridPoint | undefined;
   readonly view: SharedView | undefined;
+  readonly editing: EditedField | undefined;
 };
+
+/** A value that somebody has the cursor in: of which part, and by what name. */
+export type EditedField = { readonly part: PartId; readonly field: string };
 
 /** Most often that a moving pointer or view is told to the others, in ms. */
 const PRESENCE_INTERVAL = 50;
@@ -31,6 +35,10 @@ const presenceSchema = z.object({
     .optional()
     .catch(undefined),
   view: z.object({ x: z.number(), y: z.number(), zoom: z.number().positive() }).optional().catch(undefined),
+  editing: z
+    .object({ part: partIdSchema, field: z.string().max(64) })
+    .optional()
+    .catch(undefined),
 });
 
 /** Everyone else who is here; what they say of themselves is read with suspicion, who they are comes from the server. */
@@ -50,8 +58,8 @@ export function useOthers(room: Room): readonly OtherPerson[] {
       if (client === awareness.clientID) continue;
       const presence = presenceSchema.safeParse(state);
       if (!presence.success) continue;
-      const { user, selection, pointer, view } = presence.data;
-      others.push({ id: client, ...user, selection: new Set(selection), pointer, view });
+      const { user, selection, pointer, view, editing } = presence.data;
+      others.push({ id: client, ...user, selection: new Set(selection), pointer, view, editing });
     }
     others.sort((a, b) => a.id - b.id);
     if (!equalityDeep(last.current, others)) last.current = others;
@@ -59,13 +67,34 @@ export function useOthers(room: Room): readonly OtherPerson[] {
   });
 }
 
-/** Tells the others what is selected here; returns how to tell where the pointer is and what is in view. */
+/** Somebody else who is at a value of a part. */
+export type FieldEditor = Pick<OtherPerson, 'id' | 'name' | 'initials'> & { readonly field: string };
+
+/** Who else is at which value of this part. */
+export function useFieldEditors(others: readonly OtherPerson[], part: PartId | undefined): readonly FieldEditor[] {
+  const last = useRef<readonly FieldEditor[]>([]);
+  const now = others.flatMap(({ id, name, initials, editing }) =>
+    editing && editing.part === part ? [{ id, name, initials, field: editing.field }] : [],
+  );
+  // Others' pointers move all the time; who edits what hardly ever does.
+  if (!equalityDeep(last.current, now)) last.current = now;
+  return last.current;
+}
+
+/** Tells the others what is selected here; returns how to tell where the pointer is, what is in view and what is edited. */
 export function usePresence(room: Room, selection: Selection) {
   const { awareness } = room;
   useEffect(() => awareness.setLocalStateField('selection', [...selection.parts]), [awareness, selection]);
   const pointer = useThrottledField<GridPoint | undefined>(room, 'pointer');
   const view = useThrottledField<SharedView>(room, 'view');
-  return useMemo(() => ({ tellPointer: pointer, tellView: view }), [pointer, view]);
+  return useMemo(
+    () => ({
+      tellPointer: pointer,
+      tellView: view,
+      tellEditing: (editing: EditedField | undefined) => awareness.setLocalStateField('editing', editing),
+    }),
+    [awareness, pointer, view],
+  );
 }
 
 function useThrottledField<T extends GridPoint | undefined>({ awareness }: Room, field: string): (value: T) => void {

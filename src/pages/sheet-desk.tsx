@@ -13,20 +13,22 @@ import { PeopleHere } from '../features/sheet-head/people-here';
 import { SafeState } from '../features/sheet-head/safe-state';
 import { SheetName } from '../features/sheet-head/sheet-name';
 import { UndoRedo } from '../features/sheet-head/undo-redo';
+import { SeveralSlip } from '../features/slip/several-slip';
+import { SheetPartsProvider } from '../features/slip/sheet-parts';
 import { Slip } from '../features/slip/slip';
 import { FetTag } from '../features/tag/fet-tag';
 import { NetVoltage } from '../features/tag/net-voltage';
 import { PartProblem } from '../features/tag/part-problem';
 import { SolutionAnnouncer } from '../features/tag/solution-announcer';
 import { initialsOf } from '../formats/initials';
-import { useOthers, usePresence } from '../live/presence';
+import { useFieldEditors, useOthers, usePresence } from '../live/presence';
 import type { Room, RoomState } from '../live/room';
-import { NOTHING_SELECTED, type Selection } from '../live/selection';
 import { useSheetCommands } from '../live/sheet-commands';
 import { useDrawing } from '../live/use-drawing';
 import { Mark } from '../ui/mark';
 import { SkipLink } from '../ui/page-frame';
-import { SolutionProvider, useFetRegion } from '../workers/solution';
+import { SolutionProvider, useFetRegion, useTerminalCurrent } from '../workers/solution';
+import { useSelection } from './use-selection';
 
 type SheetDeskProps = { room: Room; state: RoomState; answer: SheetAnswer };
 
@@ -36,43 +38,45 @@ export function SheetDesk({ room, state, answer: { sheet, team } }: SheetDeskPro
   const canEdit = can(team.role, 'edit-sheet');
   const { drawing, nets, circuit, setAside } = useDrawing(room);
   const commands = useSheetCommands(room, canEdit);
-  const [selection, setSelection] = useState<Selection>(NOTHING_SELECTED);
-  const [slipPart, setSlipPart] = useState<PartId>();
+  const { selection, select, slip: openedSlip, openSlip, closeSlip } = useSelection();
   const [lit, setLit] = useState<ReadonlySet<PartId>>(new Set());
   const [frame, setFrame] = useState<{ part: PartId; request: number }>();
   const [announcement, setAnnouncement] = useState('');
   const others = useOthers(room);
-  const { tellPointer, tellView } = usePresence(room, selection);
+  const { tellPointer, tellView, tellEditing } = usePresence(room, selection);
   const [followedId, setFollowedId] = useState<number>();
   const followed = others.find(({ id }) => id === followedId);
   const leaveFollowed = useCallback(() => setFollowedId(undefined), []);
 
-  const shown = drawing.parts.find(({ id }) => id === slipPart);
-  const closeSlip = useCallback(() => setSlipPart(undefined), []);
-  const select = useCallback((next: Selection) => {
-    setSelection(next);
-    // The slip belongs to the part that is selected alone.
-    setSlipPart((open) => (open !== undefined && next.parts.size === 1 && next.parts.has(open) ? open : undefined));
-  }, []);
+  const shown = drawing.parts.find(({ id }) => id === openedSlip?.part);
   const light = useCallback((part: PartId | undefined) => setLit(new Set(part === undefined ? [] : [part])), []);
   const bringIntoView = useCallback(
     (part: PartId) => setFrame((before) => ({ part, request: (before?.request ?? 0) + 1 })),
     [],
   );
-  const slip = useMemo(
-    () =>
-      shown && (
-        <Slip
-          key={shown.id}
-          part={shown}
-          settings={drawing.settings}
-          nets={nets}
-          commands={commands}
-          onClose={closeSlip}
-        />
-      ),
-    [shown, drawing.settings, nets, commands, closeSlip],
-  );
+  const editors = useFieldEditors(others, shown?.id);
+  const slip = useMemo(() => {
+    const about = drawing.parts.filter(({ id }) => openedSlip?.parts.has(id));
+    if (!shown) return undefined;
+    return (
+      <SheetPartsProvider value={drawing.parts}>
+        {about.length > 1 ? (
+          <SeveralSlip parts={about} settings={drawing.settings} commands={commands} onClose={closeSlip} />
+        ) : (
+          <Slip
+            key={shown.id}
+            part={shown}
+            settings={drawing.settings}
+            nets={nets}
+            commands={commands}
+            onClose={closeSlip}
+            editors={editors}
+            onEditing={(field) => tellEditing(field === undefined ? undefined : { part: shown.id, field })}
+          />
+        )}
+      </SheetPartsProvider>
+    );
+  }, [shown, openedSlip, drawing, nets, commands, closeSlip, editors, tellEditing]);
 
   return (
     <SolutionProvider circuit={circuit}>
@@ -118,9 +122,10 @@ export function SheetDesk({ room, state, answer: { sheet, team } }: SheetDeskPro
             NetVoltage={NetVoltage}
             PartProblem={PartProblem}
             useRegion={useRegionOf}
+            useTerminalCurrent={useTerminalCurrent}
             slip={slip}
             slipPart={shown?.id}
-            onOpenSlip={setSlipPart}
+            onOpenSlip={openSlip}
             onCloseSlip={closeSlip}
             others={others}
             lit={lit}
@@ -139,6 +144,7 @@ export function SheetDesk({ room, state, answer: { sheet, team } }: SheetDeskPro
           onSelect={select}
           onLight={light}
           onFrame={bringIntoView}
+          onOpen={openSlip}
         />
       </div>
       <p role="status" className="sr-only">

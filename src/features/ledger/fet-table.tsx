@@ -9,6 +9,8 @@ import { bySlack, type FetRow, marginOf } from './fet-rows';
 import { figures } from './figure-cells';
 import { type LedgerColumn, LedgerTable, type RowActions } from './ledger-table';
 
+/** Letters of the longest region's name. */
+const LONGEST_REGION = 9;
 /** Width of the ruler in px. */
 const RULER = 200;
 
@@ -17,20 +19,14 @@ export function FetTable({
   rows,
   scaleEnd,
   ...rest
-}: { rows: readonly FetRow[]; scaleEnd: number; selected: ReadonlySet<PartId>; busy: boolean } & RowActions) {
+}: { rows: readonly FetRow[]; scaleEnd: number; selected: ReadonlySet<PartId> } & RowActions) {
   const columns = useMemo(() => fetColumns(rows, scaleEnd), [rows, scaleEnd]);
   return (
-    <LedgerTable
-      label="FETs"
-      columns={columns}
-      rows={rows}
-      rowKey={({ part }) => part.id}
-      partOf={({ part }) => part.id}
-      firstOrder={{ key: 'margin', falling: false }}
-      {...rest}
-    />
+    <LedgerTable label="FETs" columns={columns} rows={rows} rowKey={idOf} partOf={idOf} firstOrder="margin" {...rest} />
   );
 }
+
+const idOf = ({ part }: FetRow) => part.id;
 
 function fetColumns(rows: readonly FetRow[], scaleEnd: number): LedgerColumn<FetRow>[] {
   const volts = (name: string, pick: (row: FetRow) => number | undefined) => figures(name, 'V', rows, pick, 0);
@@ -59,7 +55,7 @@ function fetColumns(rows: readonly FetRow[], scaleEnd: number): LedgerColumn<Fet
     volts('VDS', ({ point }) => point?.vds),
     volts('VDSsat', ({ point }) => point?.vdsSat),
     // The margin orders by slack: what it is worth depends on what was asked for.
-    { ...figures('margin', 'V', rows, marginOf, -3), compare: bySlack },
+    { ...figures('margin', 'V', rows, marginOf, -3), compare: bySlack, isMissing: hasNoStanding },
     {
       key: 'ruler',
       head: (
@@ -71,20 +67,26 @@ function fetColumns(rows: readonly FetRow[], scaleEnd: number): LedgerColumn<Fet
       ),
       cell: ({ part, point }) =>
         point && <MarginRuler point={point} intent={part.values.intent} scaleEnd={scaleEnd} width={RULER} />,
+      headText: `margin on a scale of VDS from 0 to ${formatVoltage(scaleEnd, 1)}`,
+      compare: (a, b) => (marginOf(a) ?? 0) - (marginOf(b) ?? 0),
+      isMissing: (row) => marginOf(row) === undefined,
     },
     {
       key: 'intent',
       head: 'intent / mV',
       cell: ({ part: { values } }) =>
         values.intent ? (
-          <span className="flex justify-between gap-2">
-            {values.intent.region}
-            <span>{Number(((values.intent.margin ?? 0) * 1e3).toPrecision(4))}</span>
+          <span className="whitespace-pre">
+            {values.intent.region.padEnd(LONGEST_REGION)}
+            {String(Number(((values.intent.margin ?? 0) * 1e3).toPrecision(4))).padStart(5)}
           </span>
         ) : (
           <span className="text-faint">none</span>
         ),
-      compare: (a, b) => compareTexts(a.part.values.intent?.region, b.part.values.intent?.region),
+      compare: (a, b) =>
+        compareTexts(a.part.values.intent?.region, b.part.values.intent?.region) ||
+        (a.part.values.intent?.margin ?? 0) - (b.part.values.intent?.margin ?? 0),
+      isMissing: ({ part }) => part.values.intent === undefined,
     },
     {
       key: 'verdict',
@@ -97,11 +99,14 @@ function fetColumns(rows: readonly FetRow[], scaleEnd: number): LedgerColumn<Fet
           </span>
         ),
       compare: bySlack,
+      isMissing: hasNoStanding,
     },
     figures('gm', 'S', rows, ({ point }) => point?.gm),
     figures('ro', 'Ω', rows, ({ point }) => point && 1 / point.gds),
   ];
 }
+
+const hasNoStanding = ({ standing }: FetRow) => standing === undefined;
 
 /** By spelling; what is missing comes last. */
 function compareTexts(a: string | undefined, b: string | undefined): number {

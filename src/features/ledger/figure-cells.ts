@@ -1,3 +1,4 @@
+import { formatValue } from '#shared/units/format-value';
 import { figureColumn } from '../../formats/figures';
 import type { LedgerColumn } from './ledger-table';
 
@@ -11,14 +12,19 @@ export function figures<Row>(
 ): LedgerColumn<Row> {
   const column = figureColumn(rows.map(pick), unit, exponent);
   const texts = new Map(rows.map((row, index) => [row, column.texts[index]]));
+  const figure = (row: Row) => {
+    const value = pick(row);
+    return value !== undefined && Number.isFinite(value) ? value : undefined;
+  };
   return {
     key: name,
     head: `${name} / ${column.unit}`,
     cell: (row) => texts.get(row),
-    compare: (a, b) => orLast(pick(a)) - orLast(pick(b)),
+    precise(row) {
+      const value = figure(row);
+      return value === undefined ? undefined : formatValue(value, unit, 4);
+    },
+    compare: (a, b) => (figure(a) ?? 0) - (figure(b) ?? 0),
+    isMissing: (row) => figure(row) === undefined,
   };
-}
-
-function orLast(value: number | undefined): number {
-  return value !== undefined && Number.isFinite(value) ? value : Number.MAX_VALUE;
 }

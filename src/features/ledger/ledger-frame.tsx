@@ -11,11 +11,14 @@ export function LedgerFrame({
   collapsed,
   onCollapse,
   tabs,
+  action,
   children,
 }: {
   collapsed: boolean;
   onCollapse: (collapsed: boolean) => void;
   tabs: ReactNode;
+  /** What can be done with what is selected. */
+  action?: ReactNode;
   children: ReactNode;
 }) {
   const [height, setHeight] = useState(FIRST_HEIGHT);
@@ -57,11 +60,12 @@ export function LedgerFrame({
       />
       <div className="flex items-center gap-2 pr-2 sm:pr-4">
         {tabs}
+        <span className="ml-auto">{action}</span>
         <button
           type="button"
           aria-expanded={!collapsed}
           aria-label="Ledger"
-          className="ml-auto grid size-7 place-items-center text-faint hover:text-ink"
+          className="grid size-7 place-items-center text-faint hover:text-ink"
           onClick={() => onCollapse(!collapsed)}
         >
           {collapsed ? <ChevronUp size={16} aria-hidden="true" /> : <ChevronDown size={16} aria-hidden="true" />}

@@ -1,29 +1,48 @@
-import { type KeyboardEvent, type ReactNode, useState } from 'react';
+import { type KeyboardEvent, type MouseEvent, memo, type ReactNode, useMemo, useState } from 'react';
 import type { PartId } from '#shared/circuit/drawing';
+import { LedgerRow } from './ledger-row';
+import { type Choice, choiceOf, chosen } from './row-selection';
 import { SortMark } from './sort-mark';
 
 export type LedgerColumn<Row> = {
   readonly key: string;
   readonly head: ReactNode;
+  /** What the head says, where it is no plain text. */
+  readonly headText?: string;
   readonly cell: (row: Row) => ReactNode;
-  /** How rows are ordered by this column; a column without it does not sort. */
-  readonly compare?: (a: Row, b: Row) => number;
+  /** The cell's figure at length, for a hover. */
+  readonly precise?: (row: Row) => string | undefined;
+  readonly compare: (a: Row, b: Row) => number;
+  /** Rows without the figure come last whichever way the column sorts. */
+  readonly isMissing?: (row: Row) => boolean;
 };
 
 export type RowActions = {
   /** The pointer or the focus is on the row of this part, or on none. */
   onLight(part: PartId | undefined): void;
-  /** The row was clicked or entered. */
+  /** The row was clicked: bring its part into view. */
   onFrame(part: PartId): void;
+  /** The row was entered: open its part's slip. */
+  onOpen(part: PartId): void;
+  onSelectParts(parts: ReadonlySet<PartId>): void;
 };
 
-type Order = { readonly key: string; readonly falling: boolean };
+type TableProps<Row> = {
+  label: string;
+  columns: readonly LedgerColumn<Row>[];
+  rows: readonly Row[];
+  rowKey: (row: Row) => string;
+  partOf: (row: Row) => PartId | undefined;
+  selected: ReadonlySet<PartId>;
+  /** Key of the column that orders the rows at first. */
+  firstOrder: string;
+} & RowActions;
 
 /**
- * A table whose rows stand for parts: one tab stop, arrows walk the rows, Enter or a click goes to the part. Its first column
- * names the row.
+ * A table whose rows stand for parts: one tab stop, arrows walk the rows and with Shift select them, Enter opens the part's
+ * slip, a click goes to it. Its first column names the row, and stays in sight where the table is wider than the page.
  */
-export function LedgerTable<Row>({
+export const LedgerTable = memo(function LedgerTable<Row>({
   label,
   columns,
   rows,
@@ -31,105 +50,100 @@ export function LedgerTable<Row>({
   partOf,
   selected,
   firstOrder,
-  busy,
   onLight,
   onFrame,
-}: {
-  label: string;
-  columns: readonly LedgerColumn<Row>[];
-  rows: readonly Row[];
-  rowKey: (row: Row) => string;
-  partOf: (row: Row) => PartId | undefined;
-  selected: ReadonlySet<PartId>;
-  firstOrder: Order;
-  busy: boolean;
-} & RowActions) {
-  const [order, setOrder] = useState(firstOrder);
+  onOpen,
+  onSelectParts,
+}: TableProps<Row>) {
+  const [order, setOrder] = useState({ key: firstOrder, falling: false });
   const [active, setActive] = useState<string>();
-  const sorted = sortedBy(rows, columns.find(({ key }) => key === order.key)?.compare, order.falling);
+  const [anchor, setAnchor] = useState<PartId>();
+  const sorted = useMemo(() => sortedBy(rows, columns, order), [rows, columns, order]);
   const keys = sorted.map(rowKey);
   const stop = active !== undefined && keys.includes(active) ? active : keys[0];
 
-  const [first, ...others] = columns;
+  const choose = (part: PartId, choice: Choice) => {
+    const parts = sorted.flatMap((row) => partOf(row) ?? []);
+    onSelectParts(chosen(selected, part, choice, parts, anchor));
+    if (choice !== 'through' || anchor === undefined) setAnchor(part);
+  };
+  const click = (part: PartId, event: MouseEvent) => {
+    const choice = choiceOf(event);
+    choose(part, choice);
+    if (choice === 'alone') onFrame(part);
+  };
+  const press = (part: PartId | undefined, event: KeyboardEvent<HTMLTableRowElement>) => {
+    if (event.key === 'Enter' && part !== undefined) {
+      event.preventDefault();
+      choose(part, 'alone');
+      onFrame(part);
+      onOpen(part);
+      return;
+    }
+    const target = ROW_FOR_KEY[event.key]?.(event.currentTarget);
+    const button = target?.querySelector('button');
+    if (!target || !button) return;
+    event.preventDefault();
+    button.focus();
+    const reached = sorted[[...(target.parentElement?.children ?? [])].indexOf(target)];
+    const reachedPart = reached && partOf(reached);
+    if (!event.shiftKey || part === undefined || reachedPart === undefined) return;
+    const parts = sorted.flatMap((row) => partOf(row) ?? []);
+    const from = anchor !== undefined && selected.has(anchor) ? anchor : part;
+    setAnchor(from);
+    onSelectParts(chosen(selected, reachedPart, 'through', parts, from));
+  };
+  const focus = (key: string, part: PartId | undefined) => {
+    setActive(key);
+    onLight(part);
+  };
 
   return (
-    <table aria-label={label} aria-busy={busy} className="min-w-full text-xs whitespace-nowrap">
-      <thead className="sticky top-0 z-10 bg-paper text-faint shadow-[inset_0_-1px_var(--rule)]">
+    <table aria-label={label} className="min-w-full whitespace-nowrap text-xs">
+      <thead className="sticky top-0 z-20 bg-paper text-faint shadow-[inset_0_-1px_var(--rule)]">
         <tr>
-          {columns.map(({ key, head, compare }) => (
+          {columns.map(({ key, head, headText }) => (
             <th
               key={key}
               scope="col"
-              aria-sort={compare && order.key === key ? (order.falling ? 'descending' : 'ascending') : undefined}
-              className="h-7 pr-4 first:pl-4 sm:first:pl-6"
+              aria-sort={order.key === key ? (order.falling ? 'descending' : 'ascending') : undefined}
+              className="h-7 bg-paper pr-4 shadow-[inset_0_-1px_var(--rule)] first:sticky first:left-0 first:z-10 first:pl-4 sm:first:pl-6"
             >
-              {compare ? (
-                <button
-                  type="button"
-                  className={`flex min-h-6 items-center gap-1.5 hover:text-ink ${order.key === key ? 'text-ink' : ''}`}
-                  onClick={() => setOrder({ key, falling: order.key === key && !order.falling })}
-                >
-                  {head}
-                  {order.key === key && <SortMark falling={order.falling} />}
-                </button>
-              ) : (
-                head
-              )}
+              <button
+                type="button"
+                aria-label={headText}
+                className={`flex min-h-6 items-center gap-1.5 hover:text-ink ${order.key === key ? 'text-ink' : ''}`}
+                onClick={() => setOrder({ key, falling: order.key === key && !order.falling })}
+              >
+                {head}
+                {order.key === key && <SortMark falling={order.falling} />}
+              </button>
             </th>
           ))}
         </tr>
       </thead>
-      <tbody className={`transition-opacity ${busy ? 'opacity-45' : ''}`}>
+      <tbody>
         {sorted.map((row) => {
           const key = rowKey(row);
           const part = partOf(row);
-          const isSelected = part !== undefined && selected.has(part);
           return (
-            <tr
+            <LedgerRow
               key={key}
-              aria-current={isSelected ? 'true' : undefined}
-              className={`border-rule border-b hover:bg-sheet focus-within:bg-sheet ${
-                isSelected ? 'bg-sheet shadow-[inset_3px_0_var(--focus)]' : ''
-              }`}
-              onMouseEnter={() => onLight(part)}
-              onMouseLeave={() => onLight(undefined)}
-              onClick={() => part !== undefined && onFrame(part)}
-              onKeyDown={walkRows}
-            >
-              <th scope="row" className="h-6 pr-4 pl-4 sm:pl-6">
-                {/* The row's one stop for the keyboard; its click is the row's. */}
-                <button
-                  type="button"
-                  tabIndex={key === stop ? 0 : -1}
-                  className="min-h-6 min-w-6 scroll-mt-8 text-left font-bold"
-                  onFocus={() => {
-                    setActive(key);
-                    onLight(part);
-                  }}
-                  onBlur={() => onLight(undefined)}
-                >
-                  {first?.cell(row)}
-                </button>
-              </th>
-              {others.map((column) => (
-                <td key={column.key} className="h-6 pr-4">
-                  {column.cell(row)}
-                </td>
-              ))}
-            </tr>
+              row={row}
+              columns={columns}
+              isStop={key === stop}
+              isSelected={part !== undefined && selected.has(part)}
+              onClick={(event) => part !== undefined && click(part, event)}
+              onPress={(event) => press(part, event)}
+              onFocus={() => focus(key, part)}
+              onLight={(lit) => onLight(lit ? part : undefined)}
+            />
           );
         })}
       </tbody>
     </table>
   );
-}
-
-function walkRows(event: KeyboardEvent<HTMLTableRowElement>): void {
-  const target = ROW_FOR_KEY[event.key]?.(event.currentTarget)?.querySelector('button');
-  if (!target) return;
-  event.preventDefault();
-  target.focus();
-}
+}) as <Row>(props: TableProps<Row>) => ReactNode;
 
 const ROW_FOR_KEY: Readonly<Record<string, (row: HTMLTableRowElement) => Element | null | undefined>> = {
   ArrowDown: (row) => row.nextElementSibling,
@@ -140,9 +154,13 @@ const ROW_FOR_KEY: Readonly<Record<string, (row: HTMLTableRowElement) => Element
 
 function sortedBy<Row>(
   rows: readonly Row[],
-  compare: ((a: Row, b: Row) => number) | undefined,
-  falling: boolean,
+  columns: readonly LedgerColumn<Row>[],
+  order: { readonly key: string; readonly falling: boolean },
 ): readonly Row[] {
-  if (!compare) return rows;
-  return [...rows].sort((a, b) => (falling ? compare(b, a) : compare(a, b)));
+  const column = columns.find(({ key }) => key === order.key);
+  if (!column) return rows;
+  const { compare, isMissing = () => false } = column;
+  return rows.toSorted(
+    (a, b) => Number(isMissing(a)) - Number(isMissing(b)) || (order.falling ? compare(b, a) : compare(a, b)),
+  );
 }

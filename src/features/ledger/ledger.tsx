@@ -1,7 +1,8 @@
 import { Tabs } from 'radix-ui';
-import { useMemo, useState } from 'react';
+import { useCallback, useDeferredValue, useMemo, useState } from 'react';
 import { type Drawing, isComponent, type PartId } from '#shared/circuit/drawing';
 import type { DrawnNets } from '#shared/circuit/nets';
+import { dimmed } from '../../formats/dimmed';
 import type { Selection } from '../../live/selection';
 import { type Solution, useSolution, useVdsScale } from '../../workers/solution';
 import { fetRows } from './fet-rows';
@@ -20,39 +21,44 @@ type LedgerProps = {
   onLight(part: PartId | undefined): void;
   /** Bring this part into view. */
   onFrame(part: PartId): void;
+  /** Open this part's slip. */
+  onOpen(part: PartId): void;
+  /** Edit the selected parts together; left out where nobody may. */
+  onEditSelected?: (() => void) | undefined;
 };
 
 type Tab = 'fets' | 'parts' | 'nets' | 'problems';
 
 /** The tables under the drawing. They hold all that the drawing holds, and the same figures. */
-export function Ledger({ drawing, nets, selection, onSelect, onLight, onFrame }: LedgerProps) {
+export function Ledger({ drawing, nets, selection, onSelect, onLight, onFrame, onOpen, onEditSelected }: LedgerProps) {
   const solution = useSolution();
   const scaleEnd = useVdsScale();
   const [tab, setTab] = useState<Tab>('fets');
   const [collapsed, setCollapsed] = useState(false);
 
-  const record = 'record' in solution ? solution.record : undefined;
+  // The drawing and its tags come first; the tables follow as soon as those are painted, and are dimmed until then.
+  const now = useMemo(() => ({ drawing, nets, solution, scaleEnd }), [drawing, nets, solution, scaleEnd]);
+  const shown = useDeferredValue(now);
+  const outdated = shown !== now || solution.state === 'outdated';
+  const record = 'record' in shown.solution ? shown.solution.record : undefined;
   const solved = record?.status === 'solved' ? record : undefined;
   const rows = useMemo(
     () => ({
-      fets: fetRows(drawing, solved),
-      parts: partRows(drawing, solved),
-      nets: netRows(drawing, nets, solved),
+      fets: fetRows(shown.drawing, solved),
+      parts: partRows(shown.drawing, solved),
+      nets: netRows(shown.drawing, shown.nets, solved),
     }),
-    [drawing, nets, solved],
+    [shown.drawing, shown.nets, solved],
   );
   const problems = record?.problems ?? [];
   const empty = !drawing.parts.some(isComponent);
+  const selectParts = useCallback((parts: ReadonlySet<PartId>) => onSelect({ parts, wires: new Set() }), [onSelect]);
   const goTo = (part: PartId) => {
-    onSelect({ parts: new Set([part]), wires: new Set() });
+    selectParts(new Set([part]));
     onFrame(part);
   };
-  const common = {
-    selected: selection.parts,
-    busy: solution.state === 'outdated',
-    onLight,
-    onFrame: goTo,
-  };
+  const common = { selected: selection.parts, onLight, onFrame, onOpen, onSelectParts: selectParts };
+  const selectedComponents = drawing.parts.filter((part) => isComponent(part) && selection.parts.has(part.id)).length;
   const open = (next: Tab) => {
     setTab(next);
     setCollapsed(false);
@@ -63,6 +69,18 @@ export function Ledger({ drawing, nets, selection, onSelect, onLight, onFrame }:
       <LedgerFrame
         collapsed={collapsed}
         onCollapse={setCollapsed}
+        action={
+          onEditSelected &&
+          selectedComponents > 1 && (
+            <button
+              type="button"
+              className="min-h-6 text-xs underline decoration-edge underline-offset-4 hover:decoration-current"
+              onClick={onEditSelected}
+            >
+              edit {selectedComponents} selected
+            </button>
+          )
+        }
         tabs={
           <Tabs.List aria-label="Tables" className="flex flex-wrap gap-x-4 pl-4 text-xs sm:pl-6">
             <TabName tab="fets" count={rows.fets.length} onOpen={open}>
@@ -86,11 +104,11 @@ export function Ledger({ drawing, nets, selection, onSelect, onLight, onFrame }:
             focus, then place it; each FET gets its row here.
           </p>
         ) : (
-          <>
-            {tab !== 'problems' && <Unsolved solution={solution} drawing={drawing} onFrame={goTo} />}
+          <div aria-busy={outdated} className={dimmed(outdated)}>
+            {tab !== 'problems' && <Unsolved solution={shown.solution} drawing={drawing} onFrame={goTo} />}
             <Tabs.Content value="fets">
               {rows.fets.length > 0 ? (
-                <FetTable rows={rows.fets} scaleEnd={scaleEnd} {...common} />
+                <FetTable rows={rows.fets} scaleEnd={shown.scaleEnd} {...common} />
               ) : (
                 <p className="px-4 py-3 text-faint text-xs sm:px-6">There is no FET on this sheet yet.</p>
               )}
@@ -108,7 +126,7 @@ export function Ledger({ drawing, nets, selection, onSelect, onLight, onFrame }:
                 <p className="px-4 py-3 text-faint text-xs sm:px-6">No problem was found.</p>
               )}
             </Tabs.Content>
-          </>
+          </div>
         )}
       </LedgerFrame>
     </Tabs.Root>
@@ -152,7 +170,7 @@ function Unsolved({
   if (solution.state === 'pending' || solution.record.status === 'solved') return null;
   const errors = solution.record.problems.filter(({ severity }) => severity === 'error');
   return (
-    <div aria-busy={solution.state === 'outdated'} className={solution.state === 'outdated' ? 'opacity-45' : undefined}>
+    <div>
       <p className="px-4 pt-2 font-bold text-missed text-xs sm:px-6">The circuit could not be solved.</p>
       <ProblemList problems={errors} drawing={drawing} onFrame={onFrame} />
     </div>

@@ -9,6 +9,10 @@ import { formatValue } from '#shared/units/format-value';
 export type PartRow = {
   readonly part: DrawnComponent;
   readonly value: string;
+  /** The value with more digits, for a hover. */
+  readonly preciseValue: string;
+  /** The value in its SI unit, to sort by. */
+  readonly size: number;
   readonly voltage: number | undefined;
   readonly current: number | undefined;
   readonly power: number | undefined;
@@ -21,18 +25,17 @@ export function partRows(drawing: Drawing, record: OperatingPointRecord | undefi
     .sort((a, b) => byReference(a.ref, b.ref))
     .map((part) => {
       const point = record && (own(record.sources, part.ref) ?? own(record.resistors, part.ref));
-      return { part, value: valueText(part), voltage: point?.voltage, current: point?.current, power: point?.power };
+      return { part, ...valueTexts(part), voltage: point?.voltage, current: point?.current, power: point?.power };
     });
 }
 
-function valueText(part: DrawnComponent): string {
+function valueTexts(part: DrawnComponent): Pick<PartRow, 'value' | 'preciseValue' | 'size'> {
+  const [field] = valueFields(part);
   const values: Readonly<Record<string, unknown>> = part.values;
-  return valueFields(part)
-    .map(({ name, quantity }) => {
-      const value = values[name];
-      return typeof value === 'number' ? formatValue(value, quantity.unit) : '';
-    })
-    .join(' ');
+  const size = field && values[field.name];
+  if (!field || typeof size !== 'number') return { value: '', preciseValue: '', size: 0 };
+  const { unit } = field.quantity;
+  return { value: formatValue(size, unit), preciseValue: formatValue(size, unit, 4), size };
 }
 
 /** A net of the sheet, with its voltage where the circuit is solved. */

@@ -6,7 +6,7 @@ import { figures } from './figure-cells';
 import { type LedgerColumn, LedgerTable, type RowActions } from './ledger-table';
 import type { NetRow, PartRow } from './part-rows';
 
-type Common = { selected: ReadonlySet<PartId>; busy: boolean } & RowActions;
+type Common = { selected: ReadonlySet<PartId> } & RowActions;
 
 /** Resistors, sources and the like, in order of reference. */
 export function PartTable({ rows, ...rest }: { rows: readonly PartRow[] } & Common) {
@@ -18,8 +18,19 @@ export function PartTable({ rows, ...rest }: { rows: readonly PartRow[] } & Comm
         cell: ({ part }) => part.ref,
         compare: (a, b) => byReference(a.part.ref, b.part.ref),
       },
-      { key: 'kind', head: 'part', cell: ({ part }) => catalogueEntry(part.kind).label },
-      { key: 'value', head: 'value', cell: ({ value }) => value },
+      {
+        key: 'kind',
+        head: 'part',
+        cell: ({ part }) => catalogueEntry(part.kind).label,
+        compare: (a, b) => bySpelling(a.part.kind, b.part.kind) || a.size - b.size,
+      },
+      {
+        key: 'value',
+        head: 'value',
+        cell: ({ value }) => value,
+        precise: ({ preciseValue }) => preciseValue,
+        compare: (a, b) => bySpelling(a.part.kind, b.part.kind) || a.size - b.size,
+      },
       figures('voltage', 'V', rows, ({ voltage }) => voltage, 0),
       figures('current', 'A', rows, ({ current }) => current),
       figures('power', 'W', rows, ({ power }) => power),
@@ -31,9 +42,9 @@ export function PartTable({ rows, ...rest }: { rows: readonly PartRow[] } & Comm
       label="Other parts"
       columns={columns}
       rows={rows}
-      rowKey={({ part }) => part.id}
-      partOf={({ part }) => part.id}
-      firstOrder={{ key: 'ref', falling: false }}
+      rowKey={idOf}
+      partOf={idOf}
+      firstOrder="ref"
       {...rest}
     />
   );
@@ -47,10 +58,21 @@ export function NetTable({ rows, ...rest }: { rows: readonly NetRow[] } & Common
         key: 'net',
         head: 'net',
         cell: ({ name }) => name,
-        compare: (a, b) => (a.name < b.name ? -1 : a.name > b.name ? 1 : 0),
+        compare: (a, b) => bySpelling(a.name, b.name),
       },
       figures('voltage', 'V', rows, ({ voltage }) => voltage, 0),
-      { key: 'terminals', head: 'terminals', cell: ({ terminals }) => terminals.join(', ') },
+      {
+        key: 'terminals',
+        head: 'terminals',
+        cell: ({ terminals }) => String(terminals.length).padStart(3, '\u00a0'),
+        compare: (a, b) => a.terminals.length - b.terminals.length,
+      },
+      {
+        key: 'parts',
+        head: 'parts on it',
+        cell: ({ terminals }) => terminals.join(', '),
+        compare: (a, b) => bySpelling(a.terminals.join(), b.terminals.join()),
+      },
     ],
     [rows],
   );
@@ -59,10 +81,21 @@ export function NetTable({ rows, ...rest }: { rows: readonly NetRow[] } & Common
       label="Nets"
       columns={columns}
       rows={rows}
-      rowKey={({ name }) => name}
-      partOf={({ part }) => part?.id}
-      firstOrder={{ key: 'net', falling: false }}
+      rowKey={nameOf}
+      partOf={firstPartOf}
+      firstOrder="net"
       {...rest}
+      // A net is no part: its row goes to the first part on it, and is not that part's own.
+      selected={NONE}
     />
   );
+}
+
+const NONE: ReadonlySet<PartId> = new Set();
+const idOf = ({ part }: PartRow) => part.id;
+const nameOf = ({ name }: NetRow) => name;
+const firstPartOf = ({ part }: NetRow) => part?.id;
+
+function bySpelling(a: string, b: string): number {
+  return a < b ? -1 : a > b ? 1 : 0;
 }

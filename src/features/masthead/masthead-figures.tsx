@@ -2,6 +2,7 @@ import { ABSOLUTE_ZERO } from '#shared/circuit/circuit-file';
 import type { SheetSettings } from '#shared/circuit/drawing';
 import { formatExact, formatValue } from '#shared/units/format-value';
 import { type ParsedValue, parseValue } from '#shared/units/parse-value';
+import { dimmed } from '../../formats/dimmed';
 import type { SheetCommands } from '../../live/sheet-commands';
 import { ValueField } from '../../ui/value-field';
 import { useSolution, useSolvedCircuit } from '../../workers/solution';
@@ -9,7 +10,7 @@ import { ProblemSummary } from './problem-summary';
 import { sheetSummary } from './sheet-summary';
 import { VerdictCounts } from './verdict-counts';
 
-/** The sheet in one line: its temperature, the power its sources deliver, how its devices stand, and what is wrong. */
+/** The sheet in one line: its temperature, the current and power its sources deliver, how its devices stand, and what is wrong. */
 export function MastheadFigures({ settings, commands }: { settings: SheetSettings; commands: SheetCommands }) {
   const solution = useSolution();
   const circuit = useSolvedCircuit();
@@ -19,13 +20,19 @@ export function MastheadFigures({ settings, commands }: { settings: SheetSetting
   return (
     <div className="flex flex-wrap items-center gap-x-5 gap-y-1">
       <Temperature celsius={settings.temperature} commands={commands} />
-      <div aria-busy={busy} className={`flex flex-wrap items-center gap-x-5 gap-y-1 ${busy ? 'opacity-45' : ''}`}>
+      <div aria-busy={busy} className={`flex flex-wrap items-center gap-x-5 gap-y-1 ${dimmed(busy)}`}>
         {summary && summary.power > 0 && (
-          <p>
-            <span className="sr-only">power delivered by all sources </span>
-            <span title={`${formatValue(summary.power, 'W', 4)} delivered by all sources`}>
-              {formatValue(summary.power, 'W')}
+          <p
+            className="whitespace-nowrap"
+            title={`${formatValue(summary.current, 'A', 4)}: the sum of the currents that the voltage sources deliver. ${formatValue(summary.power, 'W', 4)}: the power that all sources deliver together.`}
+          >
+            <span className="sr-only">supply current </span>
+            {formatValue(summary.current, 'A')}
+            <span aria-hidden="true" className="px-2 text-faint">
+              ·
             </span>
+            <span className="sr-only">, power delivered by all sources </span>
+            {formatValue(summary.power, 'W')}
           </p>
         )}
         {summary && <VerdictCounts counts={summary.verdicts} />}

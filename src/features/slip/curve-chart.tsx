@@ -48,7 +48,9 @@ function options(view: DeviceView, { width, height, axis }: ChartSize, colours: 
   return {
     width,
     height,
-    padding: [18, 0, 0, 0],
+    padding: [28, 0, 0, 0],
+    // Rounded to whole pixels, a curve that hardly rises would climb in steps.
+    pxAlign: false,
     legend: { show: false },
     cursor: { show: false },
     scales: { x: { time: false, range: [0, end] }, y: { range: [0, most] } },

@@ -55,7 +55,7 @@ export function drawMarks(
     [half(frame.left), half(frame.foot) - 1],
     [frame.right, half(frame.foot) - 1],
   ]);
-  const head = frame.top - 7;
+  const head = frame.top - 15;
   text(`ID / ${PREFIX_FOR_EXPONENT.get(exponent) ?? ''}A`, 0, head, colours.faint);
   nameKnee();
   nameCurve();
@@ -92,17 +92,25 @@ export function drawMarks(
     }
     const spot = load && roomiestSpot(load.points.map(({ vds, id }) => at(vds, id)));
     if (!spot) return;
+    if (spot.isLevel) {
+      text('load', Math.min(spot.x, frame.right - 30), spot.y - 6, colours.ink);
+      return;
+    }
     const toTheRight = spot.x + 36 <= frame.right;
     text('load', toTheRight ? spot.x + 6 : spot.x - 6, spot.y + 4, colours.ink, toTheRight ? 'left' : 'right');
   }
 
   /** The spot on the load line that is furthest from the device's curve, away from the frame's edges. */
-  function roomiestSpot(spots: readonly { x: number; y: number }[]): { x: number; y: number } | undefined {
+  function roomiestSpot(spots: readonly { x: number; y: number }[]) {
     const { curve } = view;
+    const drawn = spots.map((spot, index) => {
+      const next = spots[index + 1] ?? spots[index - 1] ?? spot;
+      return { ...spot, isLevel: Math.abs(next.y - spot.y) < Math.abs(next.x - spot.x) / 2 };
+    });
     const lines = curve.vds.map((vds, index) => at(vds, curve.id[index] ?? 0));
     const distance = (spot: { x: number; y: number }) =>
       Math.min(...lines.map(({ x, y }) => Math.hypot(x - spot.x, y - spot.y)));
-    const within = spots.filter(({ x, y }) => y > frame.top + 10 && y < frame.foot - 8 && x > frame.left + 8);
+    const within = drawn.filter(({ x, y }) => y > frame.top + 10 && y < frame.foot - 8 && x > frame.left + 8);
     return within.toSorted((one, other) => distance(other) - distance(one))[0];
   }
 

@@ -9,7 +9,7 @@ import { useDeviceView } from './device-view';
 
 const CurveChart = lazy(() => import('./curve-chart').catch(() => ({ default: NoChart })));
 
-const SIZE = { width: 240, height: 148, axis: 38 };
+const SIZE = { width: 240, height: 164, axis: 38 };
 const RULER = SIZE.width - SIZE.axis;
 
 /** A FET's own curve with the margin ruler under it on the same scale, or the numbers of both. */
@@ -42,7 +42,7 @@ export function DeviceFigure({
         {asTable ? 'curve' : 'table'} <kbd className="no-underline">t</kbd>
       </button>
       {asTable ? (
-        <div className="pt-7">
+        <div className="pt-8">
           <CurveTable view={view} />
         </div>
       ) : (

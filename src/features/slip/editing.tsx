@@ -1,12 +1,5 @@
 import { createContext, type FocusEvent, type ReactNode, useContext, useEffect, useRef } from 'react';
-
-/** Someone else who is at a value of this part now. */
-export type FieldEditor = {
-  readonly id: number;
-  readonly field: string;
-  readonly name: string;
-  readonly initials: string;
-};
+import type { FieldEditor } from '../../live/presence';
 
 /** Who else is at values of the part whose slip this is. */
 export const Editors = createContext<readonly FieldEditor[]>([]);

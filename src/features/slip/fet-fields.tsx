@@ -113,8 +113,8 @@ function BodyField({
   if (!canEdit) return <ShownValue label="body">{ledOut ? 'led out' : 'tied to the source'}</ShownValue>;
   return (
     <EditedValue name="bodyLedOut">
-      <span className="text-faint">body</span>
-      <label className="flex items-center gap-2 py-0.5">
+      <span className="self-center text-faint">body</span>
+      <label className="flex min-h-6 items-center gap-2">
         <input
           type="checkbox"
           aria-label="body led out"

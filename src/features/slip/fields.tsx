@@ -4,7 +4,7 @@ import { EditedValue } from './editing';
 
 /** What a value is called, the value, and over its end who else is at it. */
 export function FieldGrid({ children }: { children: ReactNode }) {
-  return <div className="grid grid-cols-[5rem_minmax(0,1fr)_0] items-baseline gap-y-1.5">{children}</div>;
+  return <div className="grid grid-cols-[4.75rem_minmax(0,1fr)_0] items-baseline gap-y-1.5">{children}</div>;
 }
 
 /** A value to be typed, or for those who only look, its text. */

@@ -7,6 +7,8 @@ import { parseValue, type Quantity } from '#shared/units/parse-value';
 import type { SheetCommands } from '../../live/sheet-commands';
 import { FetFields } from './fet-fields';
 import { FieldGrid, ShownValue, TypedField } from './fields';
+import { MatchField } from './match-field';
+import { NoteField } from './note-field';
 import { readNetName, readPositive } from './read-fields';
 
 /** Every value of a part that can be set, the main ones first. */
@@ -21,8 +23,19 @@ export function PartFields({
   settings: SheetSettings;
   nets: DrawnNets;
   commands: SheetCommands;
-  firstField: RefObject<HTMLInputElement | null>;
+  /** Filled with the field that takes the focus when the slip opens. */
+  firstField: RefObject<HTMLElement | null>;
 }) {
+  const takesFocus = (element: HTMLElement | null) => {
+    firstField.current = element;
+  };
+  if (part.kind === 'note') {
+    return (
+      <FieldGrid>
+        <NoteField part={part} commands={commands} firstField={firstField} />
+      </FieldGrid>
+    );
+  }
   if (!isComponent(part)) {
     return (
       <FieldGrid>
@@ -35,7 +48,7 @@ export function PartFields({
             read={readNetName}
             onCommit={(name) => commands.setValue(part, 'net', name)}
             canEdit={commands.canEdit}
-            inputRef={firstField}
+            inputRef={takesFocus}
           />
         ) : (
           <ShownValue label="net">{nets.netOf.get(`${part.id}/net`) ?? 'none'}</ShownValue>
@@ -57,10 +70,11 @@ export function PartFields({
           read={(text) => (takesAnySign ? parseValue(text, quantity) : readPositive(text, quantity))}
           onCommit={(value) => commands.setValue(part, name, value)}
           canEdit={commands.canEdit}
-          {...(index === 0 ? { inputRef: firstField } : {})}
+          {...(index === 0 ? { inputRef: takesFocus } : {})}
         />
       ))}
       {isFet(part) && <FetFields part={part} settings={settings} commands={commands} />}
+      <MatchField part={part} commands={commands} />
     </FieldGrid>
   );
 }

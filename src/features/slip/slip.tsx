@@ -8,11 +8,12 @@ import { formatValue } from '#shared/units/format-value';
 import { dimmed } from '../../formats/dimmed';
 import { REGION_COLOUR, RegionGlyph } from '../../formats/region-glyph';
 import { VerdictOutline } from '../../formats/verdict-outline';
+import type { FieldEditor } from '../../live/presence';
 import type { SheetCommands } from '../../live/sheet-commands';
 import { ValueField } from '../../ui/value-field';
 import { useFetPoint, useSolution } from '../../workers/solution';
 import { DeviceFigure } from './device-figure';
-import { EditedValue, Editors, type FieldEditor, useEditing } from './editing';
+import { EditedValue, Editors, useEditing } from './editing';
 import { ParameterList } from './parameter-list';
 import { PartFields } from './part-fields';
 import { readReference } from './read-fields';
@@ -35,7 +36,7 @@ const NOBODY: readonly FieldEditor[] = [];
 /** The card at the selected part: its values, what it is meant to do, and how it stands. Whoever opens it places it. */
 export function Slip({ part, settings, nets, commands, onClose, editors = NOBODY, onEditing }: SlipProps) {
   const card = useRef<HTMLElement>(null);
-  const firstField = useRef<HTMLInputElement>(null);
+  const firstField = useRef<HTMLElement>(null);
   const verdict = useVerdict(part);
   const editing = useEditing(onEditing);
   const [asTable, setAsTable] = useState(false);
@@ -63,7 +64,7 @@ export function Slip({ part, settings, nets, commands, onClose, editors = NOBODY
         aria-label={`${name}: values`}
         onKeyDown={press}
         className={`relative isolate text-xs shadow-slip outline-none ${
-          isFet(part) ? 'w-[17rem] @min-[32rem]:w-[31rem]' : 'w-60'
+          isFet(part) ? 'w-[17rem] @min-[31rem]:w-[29rem]' : 'w-60'
         } ${flagged ? '' : 'border border-edge bg-sheet'}`}
       >
         {flagged && <VerdictOutline verdict={flagged} />}
@@ -82,13 +83,13 @@ export function Slip({ part, settings, nets, commands, onClose, editors = NOBODY
             </button>
           </header>
           {isFet(part) ? (
-            <div className="grid items-start gap-x-6 gap-y-3 @min-[32rem]:grid-cols-[12.5rem_15rem]">
+            <div className="grid items-start gap-x-5 gap-y-2 @min-[31rem]:grid-cols-[11rem_15rem]">
               <div>
                 {fields}
                 <VerdictLine part={part} />
               </div>
               <DeviceFigure part={part} asTable={asTable} onTable={setAsTable} />
-              <div className="@min-[32rem]:col-span-2">
+              <div className="@min-[31rem]:col-span-2">
                 <ParameterList part={part} settings={settings} commands={commands} />
               </div>
             </div>

@@ -1,12 +1,15 @@
 // @vitest-environment jsdom
 import { cleanup, render, screen, within } from '@testing-library/react';
 import { userEvent } from '@testing-library/user-event';
-import { afterEach, expect, test, vi } from 'vitest';
+import { useMemo, useState } from 'react';
+import { afterEach, expect, type Mock, test, vi } from 'vitest';
+import { operatingPoint } from '#shared/analyses/operating-point';
 import { type Drawing, type DrawnPart, isComponent, isFet, type WireEnd } from '#shared/circuit/drawing';
 import { netlist } from '#shared/circuit/netlist';
 import { BLANK_DRAWING, STARTERS } from '#shared/starters/starters';
+import { formatValue } from '#shared/units/format-value';
 import { Ledger } from '../../../src/features/ledger/ledger';
-import { NOTHING_SELECTED } from '../../../src/live/selection';
+import { NOTHING_SELECTED, type Selection } from '../../../src/live/selection';
 import { SolutionProvider } from '../../../src/workers/solution';
 import { solverHere } from '../../support/solvers';
 
@@ -31,14 +34,26 @@ function withIntents(drawing: Drawing, intents: Readonly<Record<string, Intent>>
   return { ...drawing, parts };
 }
 
-function open(drawing: Drawing) {
-  const { circuit, nets } = netlist(drawing);
-  const hands = { onSelect: vi.fn(), onLight: vi.fn(), onFrame: vi.fn() };
-  render(
+type Hands = Record<'onSelect' | 'onLight' | 'onFrame' | 'onOpen' | 'onEditSelected', Mock>;
+
+/** The ledger on a page that keeps the selection. */
+function OnPage({ drawing, hands }: { drawing: Drawing; hands: Hands }) {
+  const { circuit, nets } = useMemo(() => netlist(drawing), [drawing]);
+  const [selection, setSelection] = useState(NOTHING_SELECTED);
+  const select = (next: Selection) => {
+    setSelection(next);
+    hands.onSelect(next);
+  };
+  return (
     <SolutionProvider circuit={circuit} start={solverHere}>
-      <Ledger drawing={drawing} nets={nets} selection={NOTHING_SELECTED} {...hands} />
-    </SolutionProvider>,
+      <Ledger drawing={drawing} nets={nets} selection={selection} {...hands} onSelect={select} />
+    </SolutionProvider>
   );
+}
+
+function open(drawing: Drawing) {
+  const hands = { onSelect: vi.fn(), onLight: vi.fn(), onFrame: vi.fn(), onOpen: vi.fn(), onEditSelected: vi.fn() };
+  render(<OnPage drawing={drawing} hands={hands} />);
   const idOf = (ref: string) => drawing.parts.find((part) => isComponent(part) && part.ref === ref)?.id;
   return { ...hands, idOf, user: userEvent.setup() };
 }
@@ -88,8 +103,8 @@ test('a column sorts the rows, and once more the other way', async () => {
   expect(screen.getByRole('columnheader', { name: 'ref', hidden }).getAttribute('aria-sort')).toBe('descending');
 });
 
-test('rows are one tab stop: arrows walk and light them, Enter goes to the part, and so does a click', async () => {
-  const { user, idOf, onLight, onSelect, onFrame } = open(differentialPair());
+test('rows are one tab stop: arrows walk and light them, Enter opens the slip, a click goes to the part', async () => {
+  const { user, idOf, onLight, onSelect, onFrame, onOpen } = open(differentialPair());
   await solved();
   await user.click(screen.getByRole('button', { name: 'ref', hidden }));
   screen.getByRole('button', { name: 'Q1', hidden }).focus();
@@ -99,9 +114,62 @@ test('rows are one tab stop: arrows walk and light them, Enter goes to the part,
   expect(onFrame).not.toHaveBeenCalled();
   await user.keyboard('{Enter}');
   expect(onFrame.mock.calls).toEqual([[idOf('Q3')]]);
+  expect(onOpen.mock.calls).toEqual([[idOf('Q3')]]);
   expect(onSelect).toHaveBeenLastCalledWith({ parts: new Set([idOf('Q3')]), wires: new Set() });
   await user.click(within(rowOf('Q5')).getAllByRole('cell', { hidden })[2] ?? document.body);
   expect(onFrame).toHaveBeenLastCalledWith(idOf('Q5'));
+  expect(onOpen).toHaveBeenCalledOnce();
+});
+
+test('several rows are selected by keys and by mouse, as they stand, and edited together', async () => {
+  const { user, idOf, onSelect, onEditSelected } = open(differentialPair());
+  await solved();
+  const selected = () => onSelect.mock.lastCall?.[0].parts;
+  const these = (...refs: string[]) => new Set(refs.map(idOf));
+  await user.click(screen.getByRole('button', { name: 'ref', hidden }));
+  screen.getByRole('button', { name: 'Q2', hidden }).focus();
+  await user.keyboard('{Shift>}{ArrowDown}{ArrowDown}{/Shift}');
+  expect(selected()).toEqual(these('Q2', 'Q3', 'Q4'));
+  await user.keyboard('{Shift>}{ArrowUp}{/Shift}');
+  expect(selected()).toEqual(these('Q2', 'Q3'));
+  expect(rowOf('Q3').getAttribute('aria-current')).toBe('true');
+  await user.keyboard('{Control>}');
+  await user.click(rowOf('Q6'));
+  await user.keyboard('{/Control}');
+  expect(selected()).toEqual(these('Q2', 'Q3', 'Q6'));
+  await user.click(screen.getByRole('button', { name: 'edit 3 selected' }));
+  expect(onEditSelected).toHaveBeenCalledOnce();
+  await user.click(rowOf('Q5'));
+  expect(screen.queryByRole('button', { name: /^edit/ })).toBeNull();
+  await user.keyboard('{Shift>}');
+  await user.click(rowOf('Q3'));
+  await user.keyboard('{/Shift}');
+  expect(selected()).toEqual(these('Q3', 'Q4', 'Q5'));
+});
+
+test('every column sorts, and what has no figure comes last both ways', async () => {
+  const { user } = open(
+    withIntents(differentialPair(), { Q1: { region: 'saturated' }, Q6: { region: 'saturated', margin: 0.01 } }),
+  );
+  await solved();
+  const table = screen.getByRole('table', { name: 'FETs', hidden });
+  const heads = within(table).getAllByRole('columnheader', { hidden });
+  for (const head of heads) expect(within(head).getByRole('button', { hidden })).toBeTruthy();
+  const verdict = screen.getByRole('button', { name: 'verdict', hidden });
+  await user.click(verdict);
+  expect(rowsOf('FETs').slice(0, 2)).toEqual(['Q6', 'Q1']);
+  await user.click(verdict);
+  expect(rowsOf('FETs').slice(0, 2)).toEqual(['Q1', 'Q6']);
+});
+
+test('a figure has three digits, and four for whoever points at it', async () => {
+  const drawing = differentialPair();
+  open(drawing);
+  await solved();
+  const gm = operatingPoint(netlist(drawing).circuit).fets.Q6?.gm ?? Number.NaN;
+  expect(within(rowOf('Q6')).getByTitle(formatValue(gm, 'S', 4).replace('\u00a0', ' ')).textContent).toContain(
+    (gm * 1e3).toPrecision(3),
+  );
 });
 
 test('other parts and nets have tables too, with the figures of the record', async () => {
