@@ -64,6 +64,9 @@ function Sheet({ room, canEdit, announce }: { room: Room; canEdit: boolean; anno
       lit={new Set()}
       frame={undefined}
       announce={announce}
+      followed={undefined}
+      onView={() => undefined}
+      onLeaveFollowed={() => undefined}
     />
   );
 }
