@@ -1,5 +1,7 @@
 import { catalogueEntry } from '#shared/circuit/catalogue';
 import { type DrawnFet, type DrawnPart, isComponent, isFet, type WireEnd } from '#shared/circuit/drawing';
+import { matchOf } from '#shared/circuit/match-group';
+import { noteLines } from '#shared/circuit/note-lines';
 import { formatExact } from '#shared/units/format-value';
 
 /** What stands in bold beside a symbol: its reference, or the net it names. */
@@ -8,8 +10,15 @@ export function nameOf(part: DrawnPart): string | undefined {
   return part.kind === 'supply' || part.kind === 'net-name' ? part.values.net : undefined;
 }
 
-/** The value under a reference: `27 kΩ`, or a FET's W/L in µm with its count, `2×5/1`. */
+/** What stands under a reference: its value, and the group whose values are kept equal, `8/1 =A`. */
 export function valueText(part: DrawnPart): string | undefined {
+  const value = plainValue(part);
+  const match = matchOf(part);
+  return value === undefined || match === undefined ? value : `${value} =${match}`;
+}
+
+/** `27 kΩ`, or a FET's W/L in µm with its count, `2×5/1`. */
+function plainValue(part: DrawnPart): string | undefined {
   switch (part.kind) {
     case 'nfet':
     case 'pfet':
@@ -45,9 +54,12 @@ function micrometres(metres: number): string {
 export function spokenPart(part: DrawnPart): string {
   const { label } = catalogueEntry(part.kind);
   const title = [label.charAt(0).toUpperCase() + label.slice(1), nameOf(part)].filter(Boolean).join(' ');
-  const value = valueText(part);
+  if (part.kind === 'note') return [title, noteLines(part.values.text)[0]].filter(Boolean).join(': ');
+  const value = plainValue(part);
   if (value === undefined) return title;
-  return isFet(part) && part.values.k === undefined ? `${title}, W/L ${value} µm` : `${title}, ${value}`;
+  const spoken = isFet(part) && part.values.k === undefined ? `${title}, W/L ${value} µm` : `${title}, ${value}`;
+  const match = matchOf(part);
+  return match === undefined ? spoken : `${spoken}, kept equal as ${match}`;
 }
 
 /** A part within a sentence: `R3`, `the supply vdd`, `the ground`. */
