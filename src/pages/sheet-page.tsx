@@ -5,8 +5,8 @@ import { ApiError } from '../api/client';
 import { useSheet } from '../api/sheets';
 import type { Denial } from '../live/room';
 import { useRoom } from '../live/use-room';
-import { ButtonLink } from '../ui/button';
-import { Empty, Failure } from '../ui/notice';
+import { Button, ButtonLink } from '../ui/button';
+import { DeadEnd } from '../ui/dead-end';
 import { useStatus } from '../ui/status';
 import { Waiting } from '../ui/waiting';
 import { SheetDesk } from './sheet-desk';
@@ -16,27 +16,23 @@ export default function SheetPage() {
   const { id: sheetId = '' } = useParams();
   const answer = useSheet(sheetId);
   if (answer.isSuccess) return <LiveSheet key={sheetId} answer={answer.data} refetch={() => void answer.refetch()} />;
-  return (
-    <main id="main" className="mx-auto max-w-2xl px-4 py-10">
-      {answer.isPending ? (
-        <Waiting>Opening the sheet…</Waiting>
-      ) : (
-        <NotOpened error={answer.error} retry={() => void answer.refetch()} />
-      )}
-    </main>
-  );
+  if (answer.isError) return <NotOpened error={answer.error} retry={() => void answer.refetch()} />;
+  return <Opening>Opening the sheet</Opening>;
 }
 
 function NotOpened({ error, retry }: { error: Error; retry: () => void }) {
   if (error instanceof ApiError && error.status === 404) {
     return (
-      <Empty title="There is no such sheet, or it is not yours to see.">
+      <DeadEnd title="No such sheet, or not yours to see">
         <p>Check the address, or ask whoever sent it to invite you to the team it belongs to.</p>
-        <ButtonLink to="/">Go to your sheets</ButtonLink>
-      </Empty>
+      </DeadEnd>
     );
   }
-  return <Failure onRetry={retry}>The sheet could not be opened. {error.message}</Failure>;
+  return (
+    <DeadEnd title="The sheet could not be opened" action={<Button onClick={retry}>Try again</Button>}>
+      <p>{error.message}</p>
+    </DeadEnd>
+  );
 }
 
 const DENIAL_WORDS: Readonly<Record<Denial, string>> = {
@@ -62,50 +58,52 @@ function LiveSheet({ answer, refetch }: { answer: SheetAnswer; refetch: () => vo
 
 function ConnectedSheet({ answer, onDenied }: { answer: SheetAnswer; onDenied: (denial: Denial) => void }) {
   const { room, state } = useRoom(answer.sheet.id, onDenied);
-  if (state.kind === 'refused') {
-    return (
-      <main id="main" className="mx-auto max-w-2xl px-4 py-10">
-        <Refused why={state.why} />
-      </main>
-    );
-  }
+  if (state.kind === 'refused') return <Refused why={state.why} />;
   if (!room || state.kind === 'opening') {
+    const unreachable = state.kind === 'opening' && state.unreachable;
     return (
-      <main id="main" className="mx-auto max-w-2xl px-4 py-10">
-        <Waiting>
-          {state.kind === 'opening' && state.unreachable
-            ? 'The server cannot be reached; trying again. Check the connection.'
-            : 'Opening the sheet…'}
-        </Waiting>
-      </main>
+      <Opening>
+        {unreachable ? 'The server cannot be reached; trying again. Check the connection.' : 'Opening the sheet'}
+      </Opening>
     );
   }
   return <SheetDesk room={room} state={state} answer={answer} />;
+}
+
+function Opening({ children }: { children: string }) {
+  return (
+    <main id="main" className="p-6">
+      <Waiting>{children}</Waiting>
+    </main>
+  );
 }
 
 function Refused({ why }: { why: 'signed-out' | 'forbidden' | 'not-found' }) {
   switch (why) {
     case 'signed-out':
       return (
-        <Empty title="You are signed out.">
+        <DeadEnd
+          title="You are signed out"
+          action={
+            <ButtonLink to="/sign-in" reloadDocument>
+              Sign in
+            </ButtonLink>
+          }
+        >
           <p>What you drew until then is saved.</p>
-          <ButtonLink to="/sign-in" reloadDocument>
-            Sign in
-          </ButtonLink>
-        </Empty>
+        </DeadEnd>
       );
     case 'forbidden':
       return (
-        <Empty title="You may no longer open this sheet.">
+        <DeadEnd title="You may no longer open this sheet">
           <p>You were taken out of its team. Ask one of its owners if that was not meant.</p>
-          <ButtonLink to="/">Go to your sheets</ButtonLink>
-        </Empty>
+        </DeadEnd>
       );
     case 'not-found':
       return (
-        <Empty title="This sheet is no longer there.">
-          <ButtonLink to="/">Go to your sheets</ButtonLink>
-        </Empty>
+        <DeadEnd title="This sheet is no longer there">
+          <p>An owner of its team has deleted it.</p>
+        </DeadEnd>
       );
   }
 }

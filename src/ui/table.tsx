@@ -24,17 +24,22 @@ interface SortHeadCellProps {
   /** How the rows stand now by this column; undefined while they are ordered by another. */
   readonly order: 'rising' | 'falling' | undefined;
   readonly onSort: () => void;
+  /** Of figures that stand at the right. */
+  readonly numeric?: boolean;
   readonly className?: string;
 }
 
 /** A head that orders the rows by its column, and turns the order round when pressed again. */
-export function SortHeadCell({ label, order, onSort, className = '' }: SortHeadCellProps) {
+export function SortHeadCell({ label, order, onSort, numeric = false, className = '' }: SortHeadCellProps) {
   const sorted = { rising: 'ascending', falling: 'descending' } as const;
   return (
-    <HeadCell className={className} {...(order === undefined ? {} : { 'aria-sort': sorted[order] })}>
+    <HeadCell
+      className={`${numeric ? 'text-right' : ''} ${className}`}
+      {...(order === undefined ? {} : { 'aria-sort': sorted[order] })}
+    >
       <button
         type="button"
-        className={`inline-flex min-h-6 items-center gap-2 hover:text-ink ${order === undefined ? '' : 'text-ink'}`}
+        className={`inline-flex min-h-6 items-center gap-2 hover:text-ink ${numeric ? 'flex-row-reverse' : ''} ${order === undefined ? '' : 'text-ink'}`}
         onClick={onSort}
       >
         {label}

@@ -1,14 +1,17 @@
 import type { ListedSheet } from '#shared/api/sheets';
+import { figureColumn } from '../../formats/figures';
 import { Select } from '../../ui/select';
 import { HeadCell, SortHeadCell, Table } from '../../ui/table';
-import { inOrder, SHEET_COLUMNS, type SheetColumn, type SheetOrder } from './sheet-order';
+import { inOrder, SHEET_COLUMNS, type SheetColumn, type SheetOrder, worstMargin } from './sheet-order';
 import { type SheetActions, SheetRow } from './sheet-row';
 
+const MILLI = -3;
+
 const COLUMN_LOOKS: Record<SheetColumn, string> = {
-  name: 'w-full md:w-auto',
-  fets: 'hidden text-right sm:table-cell',
-  worst: 'hidden md:table-cell',
-  margin: 'hidden text-right xl:table-cell',
+  name: 'w-full',
+  fets: 'hidden sm:table-cell',
+  worst: 'hidden xl:table-cell',
+  margin: 'hidden xl:table-cell',
   here: 'hidden sm:table-cell',
   changed: 'hidden sm:table-cell',
 };
@@ -24,6 +27,8 @@ interface SheetListProps {
 /** Sheets, one a line, in an order that any column sets. */
 export function SheetList({ label, sheets, order, onOrder, actions }: SheetListProps) {
   const hasActions = Object.values(actions).some(Boolean);
+  const ordered = inOrder(sheets, order);
+  const margins = figureColumn(ordered.map(worstMargin), 'V', MILLI);
   return (
     <Table label={label}>
       <thead>
@@ -32,6 +37,7 @@ export function SheetList({ label, sheets, order, onOrder, actions }: SheetListP
             <SortHeadCell
               key={key}
               label={name}
+              numeric={key === 'fets' || key === 'margin'}
               className={COLUMN_LOOKS[key]}
               order={order.by === key ? (order.falling ? 'falling' : 'rising') : undefined}
               onSort={() => onOrder({ by: key, falling: order.by === key ? !order.falling : falling })}
@@ -45,8 +51,14 @@ export function SheetList({ label, sheets, order, onOrder, actions }: SheetListP
         </tr>
       </thead>
       <tbody>
-        {inOrder(sheets, order).map((sheet) => (
-          <SheetRow key={sheet.id} sheet={sheet} actions={actions} hasActions={hasActions} />
+        {ordered.map((sheet, index) => (
+          <SheetRow
+            key={sheet.id}
+            sheet={sheet}
+            margin={margins.texts[index] ?? ''}
+            actions={actions}
+            hasActions={hasActions}
+          />
         ))}
       </tbody>
     </Table>

@@ -30,7 +30,8 @@ export function inOrder(sheets: readonly ListedSheet[], { by, falling }: SheetOr
   });
 }
 
-function rankOf({ name, standing, here, changedAt }: ListedSheet, by: SheetColumn): string | number | undefined {
+function rankOf(sheet: ListedSheet, by: SheetColumn): string | number | undefined {
+  const { name, standing, here, changedAt } = sheet;
   const worst = standing?.status === 'solved' ? standing.worst : null;
   switch (by) {
     case 'name':
@@ -42,12 +43,17 @@ function rankOf({ name, standing, here, changedAt }: ListedSheet, by: SheetColum
       if (standing?.status === 'unsolved' || standing?.status === 'invalid') return Number.MIN_SAFE_INTEGER;
       return worst ? worst.slack - (worst.verdict === 'missed' ? 1e9 : 0) : undefined;
     case 'margin':
-      return worst?.margin;
+      return worstMargin(sheet);
     case 'here':
       return here.length;
     case 'changed':
       return Date.parse(changedAt);
   }
+}
+
+/** The margin of the device of least slack, in volts. */
+export function worstMargin({ standing }: ListedSheet): number | undefined {
+  return standing?.status === 'solved' ? standing.worst?.margin : undefined;
 }
 
 /** Whether a sheet answers to what was typed: every word in its name, its author's or its state's. */

@@ -9,7 +9,7 @@ import { Menu, MenuItem } from '../../ui/menu';
 import { Cell } from '../../ui/table';
 import { When } from '../../ui/when';
 import { RenameField } from './rename-field';
-import { WorstDevice, worstMargin } from './sheet-standing';
+import { WorstDevice } from './sheet-standing';
 
 const STATE_TEXTS: Record<SheetState, string> = {
   draft: 'draft',
@@ -28,18 +28,20 @@ export interface SheetActions {
 
 interface SheetRowProps {
   readonly sheet: ListedSheet;
+  /** Of the worst device in millivolts, in line with the other rows. */
+  readonly margin: string;
   readonly actions: SheetActions;
   readonly hasActions: boolean;
 }
 
 /** One sheet of the list. */
-export function SheetRow({ sheet, actions, hasActions }: SheetRowProps) {
+export function SheetRow({ sheet, margin, actions, hasActions }: SheetRowProps) {
   const [renaming, setRenaming] = useState(false);
   const menu = useRef<HTMLButtonElement>(null);
   const { standing } = sheet;
   return (
     <tr className="align-top">
-      <Cell className="max-w-0">
+      <Cell className="w-full max-w-0">
         {renaming ? (
           <RenameField
             sheet={sheet}
@@ -56,23 +58,25 @@ export function SheetRow({ sheet, actions, hasActions }: SheetRowProps) {
         <span className="block text-xs text-faint">
           {STATE_TEXTS[sheet.state]}, begun by {sheet.createdBy}
         </span>
-        {/* A phone has room for one column: what the others hold stands under the name. */}
-        <div className="mt-1 flex flex-col gap-1 md:hidden">
+        {/* Where there is no room for every column, what the others hold stands under the name. */}
+        <div className="mt-1 flex flex-col gap-1 xl:hidden">
           <div className="text-xs">
             <WorstDevice standing={standing} />
           </div>
           <div className="flex flex-wrap items-center gap-x-3 gap-y-1 text-xs text-faint sm:hidden">
             <When at={sheet.changedAt} />
-            {standing !== null && standing.fets > 0 && <span>{standing.fets} FETs</span>}
+            {standing !== null && standing.fets > 0 && (
+              <span>{standing.fets === 1 ? '1 FET' : `${standing.fets} FETs`}</span>
+            )}
             <PeopleHere sheet={sheet} />
           </div>
         </div>
       </Cell>
       <Cell className="hidden text-right sm:table-cell">{standing?.fets ?? '–'}</Cell>
-      <Cell className="hidden md:table-cell">
+      <Cell className="hidden min-w-72 xl:table-cell">
         <WorstDevice standing={standing} />
       </Cell>
-      <Cell className="hidden text-right whitespace-nowrap xl:table-cell">{worstMargin(standing)}</Cell>
+      <Cell className="hidden text-right whitespace-nowrap xl:table-cell">{margin}</Cell>
       <Cell className="hidden sm:table-cell">
         <PeopleHere sheet={sheet} />
       </Cell>

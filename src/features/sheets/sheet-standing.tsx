@@ -1,5 +1,4 @@
 import type { ListedSheet } from '#shared/api/sheets';
-import { formatScaled } from '#shared/units/format-value';
 import { standingWords } from '../../formats/standing-words';
 import { VERDICT_TEXT, VerdictShape } from '../../formats/verdict-shape';
 
@@ -24,19 +23,13 @@ export function WorstDevice({ standing }: { readonly standing: Standing }) {
       if (worst === null) return <span className="text-faint">{fets === 0 ? 'no FET' : 'no intent set'}</span>;
       const { verdict, by } = standingWords(worst);
       return (
-        <span className={`inline-flex flex-wrap items-center gap-x-2 ${VERDICT_TEXT[verdict]}`}>
-          <VerdictShape verdict={verdict} />
-          <span className="font-bold">{worst.ref}</span>
-          <span>
-            {verdict} <span className="whitespace-nowrap">{by}</span>
+        <span className={VERDICT_TEXT[verdict]}>
+          <span className="mr-2 inline-block">
+            <VerdictShape verdict={verdict} />
           </span>
+          <span className="font-bold">{worst.ref}</span> {verdict} {by}
         </span>
       );
     }
   }
-}
-
-/** The margin of the worst device, in millivolts; a dash where there is none. */
-export function worstMargin(standing: Standing): string {
-  return standing?.status === 'solved' && standing.worst ? formatScaled(standing.worst.margin, -3) : '–';
 }

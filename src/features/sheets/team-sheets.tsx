@@ -59,7 +59,7 @@ function FoundSheets({ team, sheets, onBegin }: TeamSheetsProps & { readonly she
         <input
           type="search"
           aria-label="Find a sheet"
-          placeholder="Find by name or author"
+          placeholder="Name or author"
           autoComplete="off"
           className="h-9 w-full min-w-0 border border-edge bg-sheet px-2.5 sm:max-w-72"
           value={sought}
