@@ -53,7 +53,7 @@ function search(
   const start = field.cellAt(from.at);
   const goal = field.cellAt(to.at);
   if (start === undefined || goal === undefined || start === goal) return undefined;
-  const window = widened(around([from.at, to.at]), DETOUR);
+  const reach = widened(around([from.at, to.at]), DETOUR);
   const rest = (cell: number) => {
     const at = field.pointOf(cell);
     return Math.abs(at.x - to.at.x) + Math.abs(at.y - to.at.y);
@@ -73,7 +73,7 @@ function search(
     const { x, y } = field.pointOf(cell);
     const by = WAYS[way] as GridPoint;
     const next = { x: x + by.x * GRID, y: y + by.y * GRID };
-    const outside = next.x < window.left || next.x > window.right || next.y < window.top || next.y > window.bottom;
+    const outside = next.x < reach.left || next.x > reach.right || next.y < reach.top || next.y > reach.bottom;
     return outside ? undefined : field.cellAt(next);
   };
   const arrive = (cell: number, way: number, before: number, cost: number) => {

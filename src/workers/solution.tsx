@@ -8,7 +8,8 @@ import {
   useSyncExternalStore,
 } from 'react';
 import type { FetPoint, Region } from '#shared/analyses/operating-point-record';
-import type { CircuitFile } from '#shared/circuit/circuit-file';
+import { terminalCurrent } from '#shared/analyses/terminal-current';
+import type { CircuitFile, CircuitPart } from '#shared/circuit/circuit-file';
 import type { Problem } from '#shared/circuit/problem';
 import { NO_FIGURES, type SheetFigures, sheetFigures } from './sheet-figures';
 import { createSolutionStore, type Solution, type SolutionStore } from './solution-store';
@@ -97,6 +98,15 @@ export function useFetRegion(ref: string): Region | undefined {
 /** A net's voltage to ground in volts; undefined while there is none. */
 export function useNetVoltage(net: string): number | undefined {
   return useFigures(({ nets }) => nets.get(net));
+}
+
+/** The current in A that leaves a part by a terminal; undefined unless it is that of the circuit as it stands. */
+export function useTerminalCurrent({ kind, ref }: Pick<CircuitPart, 'kind' | 'ref'>, pin: string): number | undefined {
+  return useFigures(({ solution }) =>
+    solution.state === 'current' && solution.record.status === 'solved'
+      ? terminalCurrent(solution.record, kind, ref, pin)
+      : undefined,
+  );
 }
 
 const NO_PROBLEMS: readonly Problem[] = [];

@@ -2,6 +2,9 @@ import { type ComponentType, createContext, type PointerEvent, useContext } from
 import type { Region } from '#shared/circuit/circuit-file';
 import type { DrawnComponent, DrawnFet, WireEnd, WireId } from '#shared/circuit/drawing';
 
+/** A hook: the current in A that leaves a part by a terminal; undefined while nobody knows. */
+export type UseTerminalCurrent = (part: DrawnComponent, pin: string) => number | undefined;
+
 /** What the page joins to the drawing; none of it changes while the page is open. */
 export type CanvasParts = {
   /** A FET's annotation. */

@@ -6,6 +6,7 @@ import type { GridPoint } from '#shared/geometry/place';
 import type { OtherPerson, SharedView } from '../../live/presence';
 import type { Selection } from '../../live/selection';
 import type { SheetCommands } from '../../live/sheet-commands';
+import type { UseTerminalCurrent } from './canvas-context';
 
 export type CanvasProps = {
   /** An unchanged part must be the same object from render to render. */
@@ -18,6 +19,7 @@ export type CanvasProps = {
   readonly Tag: ComponentType<{ part: DrawnFet }>;
   readonly NetVoltage: ComponentType<{ net: string }>;
   readonly PartProblem: ComponentType<{ part: DrawnComponent }>;
+  readonly useTerminalCurrent?: UseTerminalCurrent;
   readonly useRegion?: (part: DrawnFet) => Region | undefined;
   /** The open slip and the part it is attached to. */
   readonly slip: ReactNode | undefined;

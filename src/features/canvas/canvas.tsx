@@ -4,8 +4,9 @@ import type { PartId, WireEnd } from '#shared/circuit/drawing';
 import { terminalKey } from '#shared/circuit/nets';
 import type { GridPoint } from '#shared/geometry/place';
 import './canvas.css';
-import { type CanvasParts, CanvasPartsProvider } from './canvas-context';
+import { CanvasPartsProvider } from './canvas-context';
 import type { CanvasProps } from './canvas-props';
+import { CurrentMarks } from './current-marks';
 import type { Desk } from './desk';
 import { asWireId, useFlowElements } from './flow-elements';
 import { boxOf, type Found, selectionOf } from './found-things';
@@ -17,7 +18,6 @@ import { Marks } from './marks';
 import { NetMarks } from './net-marks';
 import { Panels } from './panels';
 import { hasSlip } from './part-keys';
-import { pressWire } from './press-wire';
 import { SheetFlow } from './sheet-flow';
 import type { SheetGeometry } from './sheet-geometry';
 import { SlipOverlay } from './slip-overlay';
@@ -28,6 +28,7 @@ import { useBending } from './use-bending';
 import { useBoardPointer } from './use-board-pointer';
 import { useClipboard } from './use-clipboard';
 import { useFlowChanges } from './use-flow-changes';
+import { useJoinedParts } from './use-joined-parts';
 import { useLatest } from './use-latest';
 import { useMarquee } from './use-marquee';
 import { useMoving } from './use-moving';
@@ -42,7 +43,7 @@ import { useWiring } from './use-wiring';
 import { ViewSharing } from './view-sharing';
 import { ViewportLayer } from './viewport-layer';
 
-const unknownRegion = () => undefined;
+const unknown = () => undefined;
 
 /** The drawing with its tray. It shows what it is given and asks for changes through `commands` alone. */
 export function Canvas(props: CanvasProps) {
@@ -55,8 +56,9 @@ export function Canvas(props: CanvasProps) {
 
 function Board(props: CanvasProps) {
   const { drawing, nets, commands, selection, onSelect, announce, slip, slipPart, frame } = props;
-  const { Tag, PartProblem, NetVoltage, useRegion = unknownRegion } = props;
+  const { NetVoltage, useTerminalCurrent = unknown } = props;
   const [voltages, setVoltages] = useState(true);
+  const [withCurrents, setWithCurrents] = useState(false);
   const panels = usePanels();
   const { said, say, hush } = useSaid(announce);
   const [hovered, setHovered] = useState<string>();
@@ -71,7 +73,7 @@ function Board(props: CanvasProps) {
   const shownGeometry = useRef<SheetGeometry>(undefined);
   const { bent, hands: bending } = useBending({ drawing, geometry: shownGeometry, commands, announce });
   const inHand = useMemo(() => ({ elsewhere, bent }), [elsewhere, bent]);
-  const { geometry, graph, texts } = useSheetPicture(drawing, nets, inHand);
+  const { geometry, graph, texts, currents } = useSheetPicture(drawing, nets, inHand, withCurrents);
   useLayoutEffect(() => {
     shownGeometry.current = geometry;
   }, [geometry]);
@@ -95,23 +97,7 @@ function Board(props: CanvasProps) {
   const { wiring, hands: wiringHands } = useWiring(sheet);
   const { marquee, hands: marqueeHands } = useMarquee({ ...sheet, selection, select: onSelect });
 
-  const parts = useMemo(
-    (): CanvasParts => ({
-      Tag,
-      PartProblem,
-      useRegion,
-      // A click on a terminal with a part in the hand sets the part down there; it begins no wire.
-      pressTerminal: (end, event) => {
-        if (!placingHands.now()) wiringHands.press(end, event);
-      },
-      pressWire: commands.canEdit
-        ? (wire, event) => {
-            if (!placingHands.now() && !wiringHands.now()) pressWire(wire, event, bending, view.toSheet);
-          }
-        : undefined,
-    }),
-    [Tag, PartProblem, useRegion, wiringHands, placingHands, bending, commands.canEdit, view],
-  );
+  const joined = useJoinedParts(props, { placing: placingHands, wiring: wiringHands, bending }, view);
   const { nodes, edges } = useFlowElements(drawing, geometry, nets, selection, slipPart, texts);
   const lit = useMemo(
     () => litNet(hovered === undefined ? undefined : asWireId(hovered), drawing, geometry, nets),
@@ -230,7 +216,7 @@ function Board(props: CanvasProps) {
         onKeyUp={(event) => handleKeyUp(event, desk, spaceWasTap())}
         {...handlers}
       >
-        <CanvasPartsProvider value={parts}>
+        <CanvasPartsProvider value={joined}>
           <SheetFlow
             nodes={nodes}
             edges={edges}
@@ -243,6 +229,7 @@ function Board(props: CanvasProps) {
           />
         </CanvasPartsProvider>
         <NetMarks dots={graph.dots} spots={texts.spots} lit={lit} voltages={voltages} NetVoltage={NetVoltage} />
+        <CurrentMarks spots={currents} useTerminalCurrent={useTerminalCurrent} />
         <ViewportLayer>
           <Marks
             geometry={geometry}
@@ -270,6 +257,8 @@ function Board(props: CanvasProps) {
         hint={hintFor(placing, wiring, geometry, said)}
         voltages={voltages}
         onVoltages={setVoltages}
+        currents={withCurrents}
+        onCurrents={setWithCurrents}
         onFit={fit}
         several={several}
         onSeveral={setSeveral}

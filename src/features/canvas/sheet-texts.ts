@@ -28,11 +28,13 @@ const WIRE = 3;
 export function placeTexts(drawing: Drawing, geometry: SheetGeometry, graph: WireGraph, nets: DrawnNets): SheetTexts {
   const parts = [...geometry.parts.values()].sort((a, b) => (a.id < b.id ? -1 : 1));
   const wires = wireBoxes(drawing, geometry, nets);
+  const wireIndex = new BoxIndex<NetBox>();
+  for (const wire of wires) wireIndex.add(wire);
   const taken = new BoxIndex();
   for (const part of parts) if (!graph.namesOnWires.has(part.id)) for (const ink of inkOf(part)) taken.add(ink);
   const free = new BoxIndex();
   for (const part of parts) if (!graph.namesOnWires.has(part.id)) for (const ink of inkOf(part)) free.add(ink);
-  for (const wire of wires.boxes) free.add(wire);
+  for (const wire of wires) free.add(wire);
 
   const anchors = new Map<PartId, Anchor>();
   const label = (some: readonly DrawnPart[]) => {
@@ -52,7 +54,7 @@ export function placeTexts(drawing: Drawing, geometry: SheetGeometry, graph: Wir
 
   const fets = fetsOf(parts);
   const wishes = fets.map((fet) => hungBox(tagWish(fet), TAG_WIDTH, TAG_HEIGHT));
-  const spots = netSpots(graph, nets, drawing.settings.ground, wires.index, taken, wishes);
+  const spots = netSpots(graph, nets, drawing.settings.ground, wireIndex, taken, wishes);
   for (const spot of spots) free.add(spotBox(spot));
 
   // Where there is no room on the wires for a net's name, the name's own symbol has to show it.
@@ -72,9 +74,9 @@ export function placeTexts(drawing: Drawing, geometry: SheetGeometry, graph: Wir
   return { labels: anchors, tags, spots, written: new Set(onWires.filter(isWritten).map(({ id }) => id)) };
 }
 
-function wireBoxes(drawing: Drawing, geometry: SheetGeometry, { netOf }: DrawnNets) {
+/** The straight stretches of all wires, with a little air. */
+export function wireBoxes(drawing: Drawing, geometry: SheetGeometry, { netOf }: DrawnNets): NetBox[] {
   const boxes: NetBox[] = [];
-  const index = new BoxIndex<NetBox>();
   for (const wire of drawing.wires) {
     const line = geometry.routes.get(wire.id) ?? [];
     const net = netOf.get(terminalKey(wire.from)) ?? '';
@@ -82,10 +84,9 @@ function wireBoxes(drawing: Drawing, geometry: SheetGeometry, { netOf }: DrawnNe
       const [from, to] = [line[i - 1] as GridPoint, line[i] as GridPoint];
       const box = { ...widened(around([from, to]), WIRE), net, upright: from.x === to.x };
       boxes.push(box);
-      index.add(box);
     }
   }
-  return { boxes, index };
+  return boxes;
 }
 
 function fromPart({ at, grows }: Anchor, { place }: DrawnPart): Anchor {
@@ -102,5 +103,14 @@ export function tagBoxes({ tags }: SheetTexts, geometry: SheetGeometry): Box[] {
   return [...tags].flatMap(([id, anchor]) => {
     const part = geometry.parts.get(id);
     return part ? [hungBox(onPart(anchor, part), TAG_WIDTH, TAG_HEIGHT)] : [];
+  });
+}
+
+/** The room of every label. */
+export function labelBoxes({ labels }: SheetTexts, geometry: SheetGeometry): Box[] {
+  return [...labels].flatMap(([id, anchor]) => {
+    const part = geometry.parts.get(id);
+    const block = part && labelBlock(part);
+    return part && block ? [hungBox(onPart(anchor, part), block.width, block.height)] : [];
   });
 }

@@ -15,6 +15,8 @@ type TrayProps = {
   readonly hint: string;
   readonly voltages: boolean;
   onVoltages(shown: boolean): void;
+  readonly currents: boolean;
+  onCurrents(shown: boolean): void;
   /** Clicks add to the selection and take from it, and any drag on the empty sheet frames. */
   readonly several: boolean;
   onSeveral(several: boolean): void;
@@ -68,6 +70,14 @@ export function Tray(props: TrayProps) {
         <label className="tray-toggle">
           <input type="checkbox" checked={voltages} onChange={(event) => props.onVoltages(event.target.checked)} />
           voltages
+        </label>
+        <label className="tray-toggle">
+          <input
+            type="checkbox"
+            checked={props.currents}
+            onChange={(event) => props.onCurrents(event.target.checked)}
+          />
+          currents
         </label>
         <button type="button" className="tray-button" onClick={props.onFit} title="Show the whole drawing">
           <Maximize size={14} strokeWidth={1.5} aria-hidden />

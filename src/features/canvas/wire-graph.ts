@@ -12,32 +12,40 @@ export type WireGraph = {
   readonly runsOf: ReadonlyMap<string, readonly Run[]>;
   /** Net names that stand on a wire or a terminal pair, not at a free end. */
   readonly namesOnWires: ReadonlySet<PartId>;
+  /** Per net, the grid points that its wires and leads go through, by `pointKey`. */
+  readonly pointsOf: ReadonlyMap<string, NetPoints>;
 };
 
-const RIGHT = 1;
-const DOWN = 2;
-const LEFT = 4;
-const UP = 8;
+export type NetPoints = ReadonlyMap<number, Directions>;
 
-/** Directions into which a net leads from a grid point: along its wires, and along the leads of its terminals. */
-type Directions = { wires: number; leads: number };
+/** Ways from a point, as bits. */
+export const RIGHT = 1;
+export const DOWN = 2;
+export const LEFT = 4;
+export const UP = 8;
+
+/**
+ * Directions into which a net leads from a grid point: along its wires, and along the leads of its terminals, of which
+ * there may be several.
+ */
+export type Directions = { wires: number; leads: number; terminals: number };
 
 /**
  * What the wires of each net look like once they lie on the grid together: where they part they make a dot, wherever
  * the ends of the single wires are.
  */
 export function wireGraph(drawing: Drawing, geometry: SheetGeometry, { netOf }: DrawnNets): WireGraph {
-  const nets = new Map<string, Map<string, Directions>>();
+  const nets = new Map<string, Map<number, Directions>>();
   const at = (net: string, point: GridPoint): Directions => {
     let points = nets.get(net);
     if (!points) {
       points = new Map();
       nets.set(net, points);
     }
-    const key = keyOf(point);
+    const key = pointKey(point);
     let directions = points.get(key);
     if (!directions) {
-      directions = { wires: 0, leads: 0 };
+      directions = { wires: 0, leads: 0, terminals: 0 };
       points.set(key, directions);
     }
     return directions;
@@ -59,7 +67,10 @@ export function wireGraph(drawing: Drawing, geometry: SheetGeometry, { netOf }: 
     const directions = at(net, point);
     const way = wayOf({ x: -leaves.x, y: -leaves.y });
     if (part.kind === 'net-name') names.push({ part: part.id, directions, way });
-    else directions.leads |= way;
+    else {
+      directions.leads |= way;
+      if (part.kind !== 'junction') directions.terminals += 1;
+    }
   }
   const namesOnWires = new Set<PartId>();
   for (const { part, directions, way } of names) {
@@ -68,10 +79,10 @@ export function wireGraph(drawing: Drawing, geometry: SheetGeometry, { netOf }: 
     else directions.leads |= way;
   }
 
-  const crossed = new Map<string, number>();
+  const crossed = new Map<number, number>();
   for (const points of nets.values()) for (const key of points.keys()) crossed.set(key, (crossed.get(key) ?? 0) + 1);
 
-  const dots = new Map<string, GridPoint>();
+  const dots = new Map<number, GridPoint>();
   const runsOf = new Map<string, Run[]>();
   for (const [net, points] of nets) {
     for (const [key, here] of points) if (endsAt(here) >= 3) dots.set(key, pointOf(key));
@@ -79,16 +90,16 @@ export function wireGraph(drawing: Drawing, geometry: SheetGeometry, { netOf }: 
   }
   for (const { part, at: point, end } of geometry.terminals.values()) {
     if (part.kind !== 'junction') continue;
-    const directions = nets.get(netOf.get(terminalKey(end)) ?? '')?.get(keyOf(point));
-    if (!directions || endsAt(directions) < 2) dots.set(keyOf(point), point);
+    const directions = nets.get(netOf.get(terminalKey(end)) ?? '')?.get(pointKey(point));
+    if (!directions || endsAt(directions) < 2) dots.set(pointKey(point), point);
   }
-  return { dots: [...dots.values()], runsOf, namesOnWires };
+  return { dots: [...dots.values()], runsOf, namesOnWires, pointsOf: nets };
 }
 
-function runs(points: ReadonlyMap<string, Directions>, crossed: ReadonlyMap<string, number>, way: number): Run[] {
+function runs(points: ReadonlyMap<number, Directions>, crossed: ReadonlyMap<number, number>, way: number): Run[] {
   const upright = way === DOWN;
   const through = upright ? UP | DOWN : LEFT | RIGHT;
-  const plain = (key: string) => {
+  const plain = (key: number) => {
     const here = points.get(key);
     return here?.wires === through && here.leads === 0 && crossed.get(key) === 1;
   };
@@ -98,7 +109,7 @@ function runs(points: ReadonlyMap<string, Directions>, crossed: ReadonlyMap<stri
     const from = pointOf(key);
     let to = from;
     do to = upright ? { x: to.x, y: to.y + GRID } : { x: to.x + GRID, y: to.y };
-    while (plain(keyOf(to)));
+    while (plain(pointKey(to)));
     found.push({ from, to, upright });
   }
   return found;
@@ -115,7 +126,7 @@ function* stretch(a: GridPoint, b: GridPoint): Generator<[point: GridPoint, ways
   }
 }
 
-function wayOf({ x, y }: GridPoint): number {
+export function wayOf({ x, y }: GridPoint): number {
   if (x > 0) return RIGHT;
   if (x < 0) return LEFT;
   if (y > 0) return DOWN;
@@ -130,11 +141,13 @@ function endsAt({ wires, leads }: Directions): number {
   );
 }
 
-function keyOf({ x, y }: GridPoint): string {
-  return `${x} ${y}`;
+/** A grid point as one number; good for 327 680 px either way. */
+export function pointKey({ x, y }: GridPoint): number {
+  return (x / GRID + HALF) * 2 * HALF + (y / GRID + HALF);
 }
 
-function pointOf(key: string): GridPoint {
-  const [x, y] = key.split(' ').map(Number);
-  return { x: x ?? 0, y: y ?? 0 };
+const HALF = 2 ** 15;
+
+export function pointOf(key: number): GridPoint {
+  return { x: (Math.floor(key / (2 * HALF)) - HALF) * GRID, y: ((key % (2 * HALF)) - HALF) * GRID };
 }

@@ -4,6 +4,7 @@ import { findNets, terminalKey } from '#shared/circuit/nets';
 import { type Box, hungBox, overlap, stretchBoxes } from '#shared/geometry/box';
 import { mirrored, turned } from '#shared/geometry/place';
 import { STARTERS } from '#shared/starters/starters';
+import { currentSpots, figureBox } from '../../../src/features/canvas/current-spots';
 import { spotBox } from '../../../src/features/canvas/net-spots';
 import { layOut, NOTHING_IN_HAND } from '../../../src/features/canvas/sheet-geometry';
 import { onPart, placeTexts } from '../../../src/features/canvas/sheet-texts';
@@ -18,7 +19,8 @@ function overlaps(drawing: Drawing): string[] {
   const nets = findNets(drawing);
   const geometry = layOut(drawing, nets, NOTHING_IN_HAND, undefined);
   const graph = wireGraph(drawing, geometry, nets);
-  const { labels, tags, spots, written } = placeTexts(drawing, geometry, graph, nets);
+  const placed = placeTexts(drawing, geometry, graph, nets);
+  const { labels, tags, spots, written } = placed;
   const texts: Thing[] = [];
   const ink: Thing[] = [];
   for (const part of geometry.parts.values()) {
@@ -31,6 +33,9 @@ function overlaps(drawing: Drawing): string[] {
       texts.push({ name: `label of ${name}`, box: hungBox(onPart(label, part), block.width, block.height) });
     }
     if (!written.has(part.id)) ink.push(...inkOf(part).map((box) => ({ name: `symbol of ${name}`, box })));
+  }
+  for (const spot of currentSpots(drawing, geometry, graph, nets, placed)) {
+    texts.push({ name: `current of ${spot.part.ref}.${spot.pin}`, box: figureBox(spot) });
   }
   const wires = drawing.wires.flatMap((wire) =>
     stretchBoxes(geometry.routes.get(wire.id) ?? [], 1).map((box) => ({
