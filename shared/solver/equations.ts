@@ -13,6 +13,8 @@ export interface Conditions {
   readonly inertia?: { readonly conductance: number; readonly from: Float64Array } | undefined;
   /** Voltages that unknowns are held at in place of their current law; NaN where free. */
   readonly held?: Float64Array | undefined;
+  /** FETs, by index, that are taken to be off whatever their voltages. */
+  readonly off?: Uint8Array | undefined;
 }
 
 /** ID = gds·VDS + gm·VGS + offset, in the N frame of a model: S, S, A. */
@@ -81,7 +83,7 @@ export class Equations {
     this.spreadVoltages(x, conditions.supply);
     this.#addResistors();
     this.#addCurrents(conditions.supply);
-    this.#addFets();
+    this.#addFets(conditions.off);
     if (conditions.leakage > 0) this.#addLeakage(conditions.leakage);
     if (conditions.inertia) this.#addInertia(x, conditions.inertia);
     if (conditions.held) this.#hold(x, conditions.held);
@@ -178,7 +180,7 @@ export class Equations {
     for (const { from, to, current } of this.network.currents) this.#flow(from, to, supply * current);
   }
 
-  #addFets(): void {
+  #addFets(off: Uint8Array | undefined): void {
     const v = this.netVoltages;
     const channel = this.#channel;
     const { fets } = this.network;
@@ -186,7 +188,7 @@ export class Equations {
       const { model, drain, gate, source, body, slotsAt } = fets[index] as NetworkFet;
       evaluateChannel(model, v[drain] as number, v[gate] as number, v[source] as number, v[body] as number, channel);
       this.overdrives[index] = channel.law.vov;
-      if (channel.law.vov <= 0) continue;
+      if (channel.law.vov <= 0 || off?.[index]) continue;
       this.#flow(drain, source, channel.current);
       this.#addSlopes(slotsAt, channel.byDrain, channel.byGate, channel.bySource, channel.byBody);
     }

@@ -1,4 +1,5 @@
 import { overdriveOf } from '../device/channel';
+import type { Deflation } from './deflation';
 import type { Conditions, Equations } from './equations';
 import type { NetworkFet } from './network';
 
@@ -24,13 +25,15 @@ const NET_STEP = 2;
  * Newton's method, damped: the step is cut until no FET's overdrive and no net jumps further than the square law is
  * trusted, then halved until the residual falls (Armijo; Dennis and Schnabel, Numerical Methods for Unconstrained
  * Optimization, 1983, from memory). Each current law is measured against its own conductance, so that nets of
- * microamperes count beside nets of amperes. `x` holds the start and receives the last iterate.
+ * microamperes count beside nets of amperes. `x` holds the start and receives the last iterate. With `deflation` the roots
+ * that it knows are avoided.
  */
 export function newton(
   equations: Equations,
   x: Float64Array,
   conditions: Conditions,
   mostIterations: number,
+  deflation?: Deflation,
 ): NewtonResult {
   const { size, residual, lu, step, trial, weight } = equations;
   let rises = 0;
@@ -43,7 +46,7 @@ export function newton(
 
     equations.conductances(weight);
     for (let i = 0; i < size; i++) weight[i] = 1 / (weight[i] as number);
-    const before = norm(residual, weight);
+    let before = norm(residual, weight);
     if (isSmall(step, x)) {
       advance(x, step, 1, trial);
       equations.evaluate(trial, conditions);
@@ -53,13 +56,20 @@ export function newton(
       return { status: 'converged', iterations: iteration };
     }
 
+    if (deflation) {
+      const stretch = deflation.stretch(x, step);
+      if (!Number.isFinite(stretch)) return { status: 'singular', iterations: iteration };
+      for (let i = 0; i < size; i++) step[i] = stretch * (step[i] as number);
+      before *= deflation.factor(x);
+    }
     const longest = longestStep(equations, x, step);
     let share = longest;
     let halvings = 0;
     for (; ; halvings++) {
       advance(x, step, share, trial);
       equations.evaluate(trial, conditions);
-      if (norm(residual, weight) <= (1 - SUFFICIENT_DECREASE * share) * before) break;
+      const after = norm(residual, weight) * (deflation?.factor(trial) ?? 1);
+      if (after <= (1 - SUFFICIENT_DECREASE * share) * before) break;
       if (halvings === MOST_HALVINGS) break;
       share /= 2;
     }

@@ -2,7 +2,13 @@ import { type Equations, TRUE_CIRCUIT } from './equations';
 import { type FreeRange, findFreeRange } from './free-range';
 import { newton } from './newton';
 import { hasNegativeDeterminant } from './stability';
-import { findUndrivenPieces, isDrivenThroughout, restUndrivenPieces, type UndrivenPiece } from './undriven-nets';
+import {
+  findUndrivenPieces,
+  isDrivenThroughout,
+  quietUndrivenPieces,
+  restUndrivenPieces,
+  type UndrivenPiece,
+} from './undriven-nets';
 
 /** S, the leakage that points are looked for with. */
 export const SEARCH_LEAKAGE = 1e-12;
@@ -29,10 +35,13 @@ export type Polished =
   | { readonly kind: 'free-range'; readonly range: FreeRange; readonly iterations: number }
   | { readonly kind: 'none'; readonly iterations: number };
 
-/** Takes a point found with `SEARCH_LEAKAGE` to the circuit's own equations, without leakage, or tells why there is none near. */
-export function polish(equations: Equations, found: Float64Array): Polished {
+/**
+ * Takes a point found with `SEARCH_LEAKAGE` to the circuit's own equations, without leakage, or tells why there is none near.
+ * FETs that were taken to be `off` have to be off by themselves then.
+ */
+export function polish(equations: Equations, found: Float64Array, off?: Uint8Array): Polished {
   const x = found.slice();
-  const { undriven, iterations: spent } = findUndriven(equations, x);
+  const { undriven, iterations: spent } = findUndriven(equations, x, off);
   let iterations = spent;
   for (const piece of undriven) {
     if (piece.forcedThroughput === 0) continue;
@@ -40,6 +49,7 @@ export function polish(equations: Equations, found: Float64Array): Polished {
     return { kind: 'free-range', range: { groups: piece.groups }, iterations };
   }
 
+  if (off) quietUndrivenPieces(equations, x, undriven);
   const held = new Float64Array(equations.size).fill(Number.NaN);
   for (let round = 0; round < MOST_ROUNDS; round++) {
     restUndrivenPieces(equations, x, undriven);
@@ -67,19 +77,23 @@ export function polish(equations: Equations, found: Float64Array): Polished {
 }
 
 /** The pieces that leakage alone holds at `x`, which is brought to a much smaller leakage if there may be any. */
-function findUndriven(equations: Equations, x: Float64Array): { undriven: UndrivenPiece[]; iterations: number } {
+function findUndriven(
+  equations: Equations,
+  x: Float64Array,
+  off: Uint8Array | undefined,
+): { undriven: UndrivenPiece[]; iterations: number } {
   let iterations = 0;
-  if (isDrivenThroughout(equations, x, SEARCH_LEAKAGE)) return { undriven: [], iterations };
+  if (isDrivenThroughout(equations, x, SEARCH_LEAKAGE, off)) return { undriven: [], iterations };
   const coarser = x.slice();
   for (const finer of FINER_LEAKAGES) {
     const trial = x.slice();
-    const result = newton(equations, trial, { leakage: finer, supply: 1 }, MOST_ITERATIONS);
+    const result = newton(equations, trial, { leakage: finer, supply: 1, off }, MOST_ITERATIONS);
     iterations += result.iterations;
     if (result.status !== 'converged') break;
     coarser.set(x);
     x.set(trial);
   }
-  return { undriven: findUndrivenPieces(equations, coarser, x), iterations };
+  return { undriven: findUndrivenPieces(equations, coarser, x, off), iterations };
 }
 
 /** Whether all currents cancel to rounding at every net, held ones included. */

@@ -1,6 +1,6 @@
 import { emptyChannel, evaluateChannel } from '../device/channel';
 import type { Equations } from './equations';
-import { EDGE } from './undriven-nets';
+import { EDGE, type UndrivenPiece } from './undriven-nets';
 
 /** What decides which of several points is listed first. */
 export interface Ranked {
@@ -20,10 +20,25 @@ export function rank<Candidate extends Ranked>(equations: Equations, points: rea
     if (a.point.surelyUnstable !== b.point.surelyUnstable) return a.point.surelyUnstable ? 1 : -1;
     if (a.on !== b.on) return b.on - a.on;
     if (Math.abs(a.power - b.power) > SAME_POWER * Math.max(a.power, b.power)) return b.power - a.power;
-    const differing = a.voltages.findIndex((voltage, net) => Math.abs(voltage - (b.voltages[net] ?? 0)) > SAME_VOLTAGE);
+    const differing = a.voltages.findIndex((voltage, net) => !isSameVoltage(voltage, b.voltages[net] as number));
     return differing < 0 ? 0 : (b.voltages[differing] ?? 0) - (a.voltages[differing] ?? 0);
   });
   return measured.map(({ point }) => point);
+}
+
+/** Whether two solutions are one: alike at every net that is driven, and with the same nets undriven. */
+export function isSamePoint(
+  a: { readonly x: Float64Array; readonly undriven: readonly UndrivenPiece[] },
+  b: { readonly x: Float64Array; readonly undriven: readonly UndrivenPiece[] },
+): boolean {
+  const undriven = new Set(a.undriven.flatMap(({ groups }) => groups));
+  const others = b.undriven.flatMap(({ groups }) => groups);
+  if (others.length !== undriven.size || others.some((group) => !undriven.has(group))) return false;
+  return a.x.every((voltage, group) => undriven.has(group) || isSameVoltage(voltage, b.x[group] as number));
+}
+
+function isSameVoltage(a: number, b: number): boolean {
+  return Math.abs(a - b) <= SAME_VOLTAGE * (1 + Math.abs(a));
 }
 
 /** Net voltages, FETs on, and the watts turned to heat, which by Tellegen's theorem are what the sources deliver. */

@@ -4,7 +4,7 @@ import { stepLeakage } from './leakage-stepping';
 import { type NewtonResult, newton } from './newton';
 import { polish, SEARCH_LEAKAGE } from './polish';
 import { settleInPseudoTime } from './pseudo-transient';
-import { measure, rank } from './ranking';
+import { isSamePoint, measure, rank } from './ranking';
 import { stepSources } from './source-stepping';
 import { growingDirection } from './stability';
 import { startingPoints } from './starting-points';
@@ -30,11 +30,17 @@ export type Settled =
 
 type Failure = Exclude<Settled, Point>;
 
+/** What a fixed set of starts leads to. */
+export interface Settlement {
+  /** The point that is listed first of those found, or why there is none. */
+  readonly answer: Settled;
+  /** All points found, none twice, in the order they are listed in. */
+  readonly points: readonly Point[];
+}
+
 const NEWTON_ITERATIONS = 60;
 /** Unknowns above which further starts cost more than they are likely to find. */
 const MOST_UNKNOWNS_FOR_MORE_STARTS = 200;
-/** V, within which two solutions are one. */
-const SAME_VOLTAGE = 1e-6;
 /** V, how far a circuit is pushed from an unstable point to see where it goes. */
 const PUSH = 0.1;
 
@@ -42,39 +48,36 @@ const PUSH = 0.1;
  * Finds an operating point of a circuit and, of those that a fixed set of starts leads to, the one that is listed first: not
  * surely unstable, then with most FETs on, then with the greatest power. Nothing but the circuit decides.
  */
-export function settle(equations: Equations): Settled {
-  const points: Point[] = [];
+export function settle(equations: Equations): Settlement {
+  let points: Point[] = [];
   let failure: Failure | null = null;
   let iterations = 0;
   for (const start of startingPoints(equations)) {
     const settled = settleFrom(equations, start);
     iterations += settled.iterations;
     if (settled.kind === 'point') {
-      if (points.some((known) => isSame(known.x, settled.x))) continue;
-      points.push(settled);
-      for (const left of settled.surelyUnstable ? leave(equations, settled) : []) {
-        iterations += left.iterations;
-        if (left.kind === 'point') points.push(left);
+      if (points.some((known) => isSamePoint(known, settled))) continue;
+      const found = settled.surelyUnstable ? [settled, ...leave(equations, settled)] : [settled];
+      for (const one of found) {
+        if (one !== settled) iterations += one.iterations;
+        if (one.kind === 'point' && !points.some((known) => isSamePoint(known, one))) points.push(one);
       }
-      if (isFirstOfAll(equations, rank(equations, points)[0])) break;
+      points = rank(equations, points);
+      if (isFirstOfAll(equations, points[0])) break;
     } else {
       failure = graver(equations, failure, settled);
       if (settled.kind === 'free-range') break;
     }
     if (equations.size > MOST_UNKNOWNS_FOR_MORE_STARTS) break;
   }
-  const chosen = rank(equations, points)[0] ?? failure;
-  return chosen ? { ...chosen, iterations } : { kind: 'none', x: new Float64Array(equations.size), iterations };
+  const chosen = points[0] ?? failure ?? { kind: 'none', x: new Float64Array(equations.size) };
+  return { answer: { ...chosen, iterations }, points };
 }
 
 /** Nothing is listed before a point with every FET on that is not surely unstable, but for one with more power. */
 function isFirstOfAll(equations: Equations, point: Point | undefined): boolean {
   if (!point || point.surelyUnstable) return false;
   return measure(equations, point.x).on === equations.network.fets.length;
-}
-
-function isSame(a: Float64Array, b: Float64Array): boolean {
-  return a.every((voltage, group) => Math.abs(voltage - (b[group] ?? 0)) <= SAME_VOLTAGE);
 }
 
 /** Of two failures the one that says more: a free range, else the one nearer to balance. */
@@ -109,7 +112,7 @@ export function settleFrom(equations: Equations, start: Float64Array): Settled {
 }
 
 /** Where the circuit goes when it is pushed off an unstable point to either side. */
-function leave(equations: Equations, point: Point): Settled[] {
+export function leave(equations: Equations, point: Point): Settled[] {
   const direction = growingDirection(equations, point.x, point.held);
   return [PUSH, -PUSH].map((push) => {
     const x = point.x.map((voltage, i) => voltage + push * (direction[i] ?? 0));

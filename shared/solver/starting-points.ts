@@ -21,6 +21,39 @@ export function* startingPoints(equations: Equations): Generator<Float64Array> {
   yield new Float64Array(equations.size);
 }
 
+/** Spread starts: how many have every net somewhere within the supplies, and as many more have it at one end or the other. */
+const SPREAD = 16;
+
+/**
+ * Further starts for a search, a fixed number spread over the range of the supplies; the first is the circuit without its
+ * devices, where a self-biased circuit rests before it has started.
+ */
+export function* spreadStartingPoints(equations: Equations): Generator<Float64Array> {
+  yield solveLinear(equations, resistor(0, 0));
+  const { groups, groupOf, offset } = equations.network;
+  let low = 0;
+  let high = 0;
+  for (let net = 0; net < groupOf.length; net++) {
+    if (groupOf[net] !== -1) continue;
+    low = Math.min(low, offset[net] as number);
+    high = Math.max(high, offset[net] as number);
+  }
+  for (let start = 0; start < 2 * SPREAD; start++) {
+    yield Float64Array.from(groups, (_, group) => {
+      const share = scattered(start, group);
+      return low + (high - low) * (start % 2 === 0 ? share : Math.round(share));
+    });
+  }
+}
+
+/** A number from 0 to 1 that looks like chance and is the same on every machine: a hash of two integers. */
+function scattered(start: number, group: number): number {
+  let hash = Math.imul(start + 1, 0x9e3779b1) ^ Math.imul(group + 1, 0x85ebca6b);
+  hash = Math.imul(hash ^ (hash >>> 15), 0x2c1b3c6d);
+  hash = Math.imul(hash ^ (hash >>> 12), 0x297a2d39);
+  return ((hash ^ (hash >>> 15)) >>> 0) / 2 ** 32;
+}
+
 function resistor(n: number, p: number): (model: FetModel) => LinearFet {
   return ({ sign, kn }) => ({ gds: kn * RESISTOR_OVERDRIVE * (sign > 0 ? n : p), gm: 0, offset: 0 });
 }

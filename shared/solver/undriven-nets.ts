@@ -11,6 +11,10 @@ const ROUNDING = 1e-12;
 /** V, by which no piece moves any more. */
 const AT_REST = 1e-14;
 const MOST_SWEEPS = 60;
+const QUIETING_SWEEPS = 3;
+/** V, the first and the last distance that is tried to turn devices off. */
+const FIRST_QUIETING = 1e-3;
+const LAST_QUIETING = 1e4;
 const MOST_HALVINGS = 200;
 const MOST_DOUBLINGS = 50;
 
@@ -26,14 +30,15 @@ export interface UndrivenPiece {
 const BEYOND_LEAKAGE = 10;
 
 /** Whether resistors and devices that clearly conduct join every group to ground, so that nothing needs a closer look. */
-export function isDrivenThroughout(equations: Equations, x: Float64Array, leakage: number): boolean {
+export function isDrivenThroughout(equations: Equations, x: Float64Array, leakage: number, off?: Uint8Array): boolean {
   const { network, netVoltages: v } = equations;
   equations.spreadVoltages(x);
   const pieces = new Pieces(network);
   for (const { a, b } of network.resistors) pieces.join(a, b);
   let leaked = 0;
   for (const voltage of v) leaked += leakage * Math.abs(voltage);
-  for (const fet of network.fets) {
+  for (const [index, fet] of network.fets.entries()) {
+    if (off?.[index]) continue;
     const vov = overdrive(fet, v);
     if (vov > 0 && (fet.model.kn / 2) * vov * vov > BEYOND_LEAKAGE * leaked) pieces.join(fet.drain, fet.source);
   }
@@ -44,9 +49,14 @@ export function isDrivenThroughout(equations: Equations, x: Float64Array, leakag
 /**
  * Pieces that nothing which conducts joins to ground. `coarse` and `fine` solve the circuit with a larger and a much
  * smaller leakage: a FET is off when what it could carry at its overdrive falls with the leakage, since then it only
- * carries what the leaks draw through it.
+ * carries what the leaks draw through it. FETs in `off` are off in any case.
  */
-export function findUndrivenPieces(equations: Equations, coarse: Float64Array, fine: Float64Array): UndrivenPiece[] {
+export function findUndrivenPieces(
+  equations: Equations,
+  coarse: Float64Array,
+  fine: Float64Array,
+  off?: Uint8Array,
+): UndrivenPiece[] {
   const { network } = equations;
   equations.spreadVoltages(coarse);
   const before = network.fets.map((fet) => Math.max(0, overdrive(fet, equations.netVoltages)) ** 2);
@@ -55,6 +65,7 @@ export function findUndrivenPieces(equations: Equations, coarse: Float64Array, f
   const joined = new Pieces(network);
   for (const { a, b } of network.resistors) joined.join(a, b);
   for (const [index, fet] of network.fets.entries()) {
+    if (off?.[index]) continue;
     const vov = overdrive(fet, v);
     if (vov > EDGE && vov * vov > FALLING * (before[index] ?? 0)) joined.join(fet.drain, fet.source);
   }
@@ -142,6 +153,29 @@ class Pieces {
   isGrounded(group: number): boolean {
     return this.find(group) === this.#ground;
   }
+}
+
+/** Moves each undriven piece, where it can, to the nearest voltage at which every device with its drain or source on it is off. */
+export function quietUndrivenPieces(equations: Equations, x: Float64Array, pieces: readonly UndrivenPiece[]): void {
+  const boundaries = pieces.map(({ groups }) => boundaryOf(equations.network, groups));
+  for (let sweep = 0; sweep < QUIETING_SWEEPS; sweep++) {
+    for (const [index, { groups }] of pieces.entries()) {
+      equations.spreadVoltages(x);
+      const shift = shiftToOff(boundaries[index] ?? [], equations.netVoltages);
+      for (const group of groups) x[group] = (x[group] as number) + shift;
+    }
+  }
+}
+
+/** The least shift by doublings to either side that turns every device off; 0 where none does. */
+function shiftToOff(boundary: readonly BoundaryFet[], v: Float64Array): number {
+  const isOff = (shift: number): boolean => boundary.every((device) => overdriveAt(device, v, shift) <= 0);
+  if (isOff(0)) return 0;
+  for (let distance = FIRST_QUIETING; distance < LAST_QUIETING; distance *= 2) {
+    if (isOff(distance)) return distance;
+    if (isOff(-distance)) return -distance;
+  }
+  return 0;
 }
 
 /** A device between a piece and the rest, with which of its terminals move with the piece. */
