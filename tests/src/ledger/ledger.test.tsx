@@ -1,5 +1,5 @@
 // @vitest-environment jsdom
-import { cleanup, render, screen, within } from '@testing-library/react';
+import { cleanup, configure, render, screen, within } from '@testing-library/react';
 import { userEvent } from '@testing-library/user-event';
 import { useMemo, useState } from 'react';
 import { afterEach, expect, type Mock, test, vi } from 'vitest';
@@ -13,6 +13,9 @@ import { NOTHING_SELECTED, type Selection } from '../../../src/live/selection';
 import { SolutionProvider } from '../../../src/workers/solution';
 import { solverHere } from '../../support/solvers';
 
+// Tables come after what is more urgent, and on a busy machine that takes its time.
+configure({ asyncUtilTimeout: 10_000 });
+vi.setConfig({ testTimeout: 30_000 });
 afterEach(cleanup);
 
 function differentialPair(): Drawing {
