@@ -1,5 +1,5 @@
 import { useCallback, useEffect, useLayoutEffect, useMemo, useRef, useState } from 'react';
-import { ReactFlowProvider } from 'reactflow';
+import { ReactFlowProvider, useStore } from 'reactflow';
 import type { PartId, WireEnd } from '#shared/circuit/drawing';
 import { terminalKey } from '#shared/circuit/nets';
 import type { GridPoint } from '#shared/geometry/place';
@@ -38,7 +38,7 @@ import { useQuietStrictMode } from './use-quiet-strict-mode';
 import { useSaid } from './use-said';
 import { useSeveral } from './use-several';
 import { useSheetPicture } from './use-sheet-picture';
-import { useView } from './use-view';
+import { FAR_ZOOM, useView } from './use-view';
 import { useWiring } from './use-wiring';
 import { ViewSharing } from './view-sharing';
 import { ViewportLayer } from './viewport-layer';
@@ -67,6 +67,7 @@ function Board(props: CanvasProps) {
   const selectedAtPress = useRef(selection);
   const { several, setSeveral } = useSeveral(board);
   const view = useView();
+  const far = useStore(({ transform }) => transform[2] < FAR_ZOOM);
   useQuietStrictMode();
 
   const { elsewhere, hands: moving } = useMoving(drawing, commands, announce);
@@ -209,6 +210,7 @@ function Board(props: CanvasProps) {
         tabIndex={0}
         role="application"
         aria-label="Drawing"
+        data-far={far || undefined}
         data-can-edit={commands.canEdit || undefined}
         data-wiring={wiring !== undefined || undefined}
         data-placing={placing !== undefined || undefined}

@@ -5,6 +5,7 @@ import { noteLines } from '#shared/circuit/note-lines';
 import type { Anchor, Box } from '#shared/geometry/box';
 import { type PinPlace, pinPlaces } from '#shared/geometry/pins';
 import type { GridPoint } from '#shared/geometry/place';
+import { RegionGlyph } from '../../formats/region-glyph';
 import { useCanvasParts } from './canvas-context';
 import type { PartData } from './flow-elements';
 import { nameOf, spokenPart, spokenTerminal, terminalTitle, valueText } from './part-text';
@@ -54,6 +55,7 @@ export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps
       {isFet(part) && tag && !slipOpen && (
         <div className="part-tag" style={hang(onPart(tag, part), box)}>
           <Tag part={part} />
+          <FarGlyph part={part} />
         </div>
       )}
     </div>
@@ -63,6 +65,17 @@ export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps
 function NoteText({ text }: { text: string }) {
   if (text.trim() === '') return <p className="note note-empty">{EMPTY_NOTE}</p>;
   return <p className="note">{noteLines(text).join('\n')}</p>;
+}
+
+/** All that is left of a tag when the drawing is seen from too far to read. */
+function FarGlyph({ part }: { part: DrawnFet }) {
+  const { useRegion } = useCanvasParts();
+  const region = useRegion(part);
+  return region === undefined ? null : (
+    <span className="far-glyph" aria-hidden="true">
+      <RegionGlyph region={region} />
+    </span>
+  );
 }
 
 /** Apart, so that a change of region draws the symbol alone. */

@@ -9,6 +9,8 @@ import { cornersOf } from './text-blocks';
 
 export const LEAST_ZOOM = 0.2;
 export const MOST_ZOOM = 4;
+/** Below it 12 px text is under 7 px, too small to read. */
+export const FAR_ZOOM = 7 / 12;
 
 /** Free space about a fitted drawing, in px of the window: room for the labels at its edge. */
 const PADDING = 48;
