@@ -19,6 +19,7 @@ import { keepHouse } from './services/housekeeping';
 import { createListNews } from './services/list-news';
 import { createStandings } from './services/standings';
 import { tellTeam } from './services/tell-team';
+import { createSolving } from './solving/solving';
 import type { OpenLog } from './sync/log';
 import { Rooms } from './sync/rooms';
 import { acceptSync } from './sync/upgrade';
@@ -87,12 +88,14 @@ export async function startServer(config: Config, replaced: Replacements = {}): 
     onError: (error, about) => log.error({ err: error, ...about }, 'a sheet could not be stored'),
     onStir: (sheetId) => listNews.ofSheet(sheetId),
   });
+  const solving = createSolving();
   const standings = createStandings({
     rooms,
+    solving,
     endOfLog: (sheetId) => endOfLog(db, sheetId),
     onError: (error, about) => log.error({ err: error, ...about }, 'a sheet could not be solved for the list'),
   });
-  const context: Context = { db, now, sessions, rooms, events, standings, listNews, publicUrl: () => url };
+  const context: Context = { db, now, sessions, rooms, solving, events, standings, listNews, publicUrl: () => url };
 
   const isReady = () => sqlite.open && sqlite.prepare('select 1').get() !== undefined;
   const { trustProxy } = config;
@@ -126,6 +129,7 @@ export async function startServer(config: Config, replaced: Replacements = {}): 
       await pages.close?.();
       await closed;
       clearTimeout(deadline);
+      await solving.end();
       sqlite.close();
     },
   };

@@ -1,4 +1,3 @@
-import { operatingPoint } from '#shared/analyses/operating-point';
 import { operatingPointBody } from '#shared/api/operating-point';
 import { changeSheetBody, createSheetBody } from '#shared/api/sheets';
 import { parseBody } from '../http/parse';
@@ -76,9 +75,9 @@ export function sheetRoutes(ctx: Context): Route[] {
       path: '/api/sheets/:sheetId/operating-point',
       access: 'signed-in',
       perMinute: 600,
-      handle: ({ param, signedIn: { person } }) => ({
+      handle: async ({ param, signedIn: { person } }) => ({
         status: 200,
-        body: liveOperatingPoint(ctx, param('sheetId'), person.id),
+        body: await liveOperatingPoint(ctx, param('sheetId'), person.id),
       }),
     },
     {
@@ -86,8 +85,8 @@ export function sheetRoutes(ctx: Context): Route[] {
       path: '/api/operating-point',
       access: 'signed-in',
       perMinute: 600,
-      handle: ({ body }) => {
-        const record = operatingPoint(parseBody(operatingPointBody, body).circuit);
+      handle: async ({ body, signedIn: { person } }) => {
+        const record = await ctx.solving.operatingPoint(parseBody(operatingPointBody, body).circuit, person.id);
         return { status: record.status === 'invalid' ? 422 : 200, body: record };
       },
     },

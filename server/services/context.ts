@@ -1,5 +1,6 @@
 import type { Sessions } from '../auth/sessions';
 import type { Db } from '../db/connect';
+import type { Solving } from '../solving/solving';
 import type { Rooms } from '../sync/rooms';
 import type { Events } from './events';
 import type { ListNews } from './list-news';
@@ -12,6 +13,7 @@ export interface Context {
   readonly now: () => number;
   readonly sessions: Sessions;
   readonly rooms: Rooms;
+  readonly solving: Solving;
   readonly events: Events;
   readonly standings: Standings;
   readonly listNews: ListNews;

@@ -24,7 +24,10 @@ export async function listSheets(ctx: Context, teamId: string, askerId: string):
 }
 
 async function solveWithPatience(ctx: Context, teamId: string, sheets: readonly { id: string }[]): Promise<void> {
-  const solving = ctx.standings.solve(sheets.map(({ id }) => id));
+  const solving = ctx.standings.solve(
+    teamId,
+    sheets.map(({ id }) => id),
+  );
   const impatience = new AbortController();
   const late = await Promise.race([
     solving.then(() => false),

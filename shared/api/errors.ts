@@ -20,6 +20,8 @@ export const STATUS_OF_CODE = {
   invalid: 422,
   'too-many': 429,
   internal: 500,
+  busy: 503,
+  'took-too-long': 503,
 } as const satisfies Record<string, number>;
 
 export type ErrorCode = keyof typeof STATUS_OF_CODE;

@@ -12,9 +12,20 @@ import { assembleTeam, Visitor } from './support/visitor';
 const server = await startTestServer();
 const { teamId, owner, designer, viewer } = await assembleTeam(server);
 
+/** The team's list, once every sheet in it is solved. */
+async function listOf(visitor: Visitor, team: string): Promise<ListedSheet[]> {
+  return vi.waitFor(
+    async () => {
+      const { sheets } = sheetsAnswer.parse((await visitor.get(`/api/teams/${team}/sheets`)).body);
+      expect(sheets.map(({ standing }) => standing)).not.toContain(null);
+      return sheets;
+    },
+    { timeout: 10_000 },
+  );
+}
+
 async function listed(visitor: Visitor, sheetId: string): Promise<ListedSheet> {
-  const { sheets } = sheetsAnswer.parse((await visitor.get(`/api/teams/${teamId}/sheets`)).body);
-  const found = sheets.find(({ id }) => id === sheetId);
+  const found = (await listOf(visitor, teamId)).find(({ id }) => id === sheetId);
   if (!found) throw new Error(`the list lacks ${sheetId}`);
   return found;
 }
@@ -55,9 +66,12 @@ test('a sheet that cannot be solved says why, and an empty one that nothing is d
   const live = await new LiveSheet(server, designer, id).synced();
   const gateResistors = readDrawing(live.doc).drawing.parts.filter((part) => 'ref' in part && /^R[12]$/.test(part.ref));
   remove(live.doc, new Set(gateResistors.map((part) => part.id)), new Set());
-  await vi.waitFor(async () => {
-    expect((await listed(viewer, id)).standing).toMatchObject({ status: 'invalid', fets: 1, reason: /float/ });
-  });
+  await vi.waitFor(
+    async () => {
+      expect((await listed(viewer, id)).standing).toMatchObject({ status: 'invalid', fets: 1, reason: /float/ });
+    },
+    { timeout: 10_000 },
+  );
 });
 
 test('a sheet whose FETs have no intent has no worst device', async () => {
@@ -89,11 +103,9 @@ test('a restart changes nothing that the list says', async () => {
   for (const starter of ['mirror', 'cascode-amplifier', 'output-driver']) {
     await team.owner.createSheet(team.teamId, { starter });
   }
-  const list = async (visitor: Visitor) =>
-    sheetsAnswer.parse((await visitor.get(`/api/teams/${team.teamId}/sheets`)).body);
-  const before = await list(team.owner);
+  const before = await listOf(team.owner, team.teamId);
   await first.stop();
   const again = new Visitor(await startTestServer({ file }));
   await again.signIn('Ines Rautio');
-  expect(await list(again)).toEqual(before);
+  expect(await listOf(again, team.teamId)).toEqual(before);
 });

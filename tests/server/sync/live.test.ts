@@ -5,6 +5,7 @@ import * as Y from 'yjs';
 import { openDatabase } from '../../../server/db/connect';
 import { loadUpdates } from '../../../server/db/queries/sheet-log';
 import type { OpenLog } from '../../../server/sync/log';
+import { ladder } from '../support/ladder';
 import { contentOf, LiveSheet, rawSocket } from '../support/live-sheet';
 import { newDatabaseFile, startTestServer } from '../support/start-test-server';
 import { assembleTeam, Visitor } from '../support/visitor';
@@ -118,6 +119,24 @@ describe('a live sheet', () => {
     expect(stored(sheetId).getMap('sheet').toJSON()).toEqual(ines.notes.toJSON());
   });
 });
+
+test('a heavy circuit that one person has solved delays no edit of another', async () => {
+  const sheetId = await team.owner.createSheet(team.teamId);
+  const ines = await open(team.owner, sheetId);
+  const samir = await open(team.designer, sheetId);
+  let answered = false;
+  const heavy = team.viewer.post('/api/operating-point', { circuit: ladder(3000) }).then(({ status }) => {
+    answered = true;
+    return status;
+  });
+  for (let count = 1; count <= 20; count += 1) {
+    const seen = new Promise<unknown>((resolve) => samir.notes.observe(() => resolve(samir.notes.get('count'))));
+    ines.notes.set('count', count);
+    expect(await seen).toBe(count);
+  }
+  expect(answered, 'solved before the edits').toBe(false);
+  expect(await heavy).toBe(200);
+}, 30_000);
 
 describe('when the disk fails', () => {
   const { owner, designer, teamId } = fragileTeam;
