@@ -3,6 +3,7 @@ import type { Circuit } from '../circuit/read-circuit';
 import { Equations } from '../solver/equations';
 import { buildNetwork, type Network } from '../solver/network';
 import { settleFrom } from '../solver/settle';
+import { topologyOf } from '../solver/topology';
 import type { OperatingPointRecord } from './operating-point-record';
 import { describeSolution } from './solution';
 
@@ -34,14 +35,14 @@ export function* traceLoadLine(
 
   const start = Math.abs(at.vds);
   const points: LoadPoint[] = [];
+  const topology = topologyOf(sweepTo(circuit, part, at.reversed, start));
   const upwards = voltages.filter((vds) => vds >= start).toSorted((a, b) => a - b);
   const downwards = voltages.filter((vds) => vds < start).toSorted((a, b) => b - a);
   for (const sweep of [upwards, downwards]) {
     let x: Float64Array | undefined;
     for (const vds of sweep) {
       yield undefined;
-      const swept = sweepTo(circuit, part, at.reversed, vds);
-      const network = buildNetwork(swept);
+      const network = buildNetwork(sweepTo(circuit, part, at.reversed, vds), topology);
       const equations = new Equations(network);
       // Only voltages differ from one point to the next, so nets are grouped alike and the last answer starts the next.
       const settled = settleFrom(equations, x ?? voltagesOf(network, record));
@@ -82,7 +83,7 @@ function sweepTo(circuit: Circuit, part: FetPart, reversed: boolean, vds: number
 /** Whether voltage sources and inductors alone join the channel's ends, so that another source would close a loop. */
 function areHeld(circuit: Circuit, part: FetPart): boolean {
   if (part.drain === part.source) return true;
-  const { nets, groupOf } = buildNetwork({ ...circuit, parts: circuit.parts.filter((one) => one !== part) });
+  const { nets, groupOf } = topologyOf({ ...circuit, parts: circuit.parts.filter((one) => one !== part) });
   const [drain, source] = [nets.indexOf(part.drain), nets.indexOf(part.source)];
   return drain >= 0 && source >= 0 && groupOf[drain] === groupOf[source];
 }

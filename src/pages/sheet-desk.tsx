@@ -2,7 +2,7 @@ import { useCallback, useMemo, useState } from 'react';
 import { Link } from 'react-router-dom';
 import { can } from '#shared/access/roles';
 import type { SheetAnswer } from '#shared/api/sheets';
-import type { DrawnPart, PartId } from '#shared/circuit/drawing';
+import { type DrawnPart, isComponent, type PartId } from '#shared/circuit/drawing';
 import { useSession } from '../api/session';
 import { Canvas } from '../features/canvas/canvas';
 import { Ledger } from '../features/ledger/ledger';
@@ -35,7 +35,7 @@ type SheetDeskProps = { room: Room; state: RoomState; answer: SheetAnswer };
 /** The sheet as it is worked on: masthead, drawing with tray and slip, ledger. */
 export function SheetDesk({ room, state, answer: { sheet, team } }: SheetDeskProps) {
   const { person } = useSession();
-  const canEdit = can(team.role, 'edit-sheet');
+  const canEdit = can(team.role, 'edit-sheet') && !sheet.archived;
   const { drawing, nets, circuit, setAside } = useDrawing(room);
   const commands = useSheetCommands(room, canEdit);
   const { selection, select, slip: openedSlip, openSlip, closeSlip } = useSelection();
@@ -54,6 +54,10 @@ export function SheetDesk({ room, state, answer: { sheet, team } }: SheetDeskPro
     (part: PartId) => setFrame((before) => ({ part, request: (before?.request ?? 0) + 1 })),
     [],
   );
+  const editSelected = () => {
+    const first = drawing.parts.find((part) => isComponent(part) && selection.parts.has(part.id));
+    if (first) openSlip(first.id);
+  };
   const editors = useFieldEditors(others, shown?.id);
   const slip = useMemo(() => {
     const about = drawing.parts.filter(({ id }) => openedSlip?.parts.has(id));
@@ -103,7 +107,9 @@ export function SheetDesk({ room, state, answer: { sheet, team } }: SheetDeskPro
           {canEdit ? (
             <UndoRedo commands={commands} />
           ) : (
-            <p className="border border-edge px-2 text-xs">looking on as {team.role}</p>
+            <p className="border border-edge px-2 text-xs">
+              {sheet.archived ? 'archived' : `looking on as ${team.role}`}
+            </p>
           )}
           <div className="ml-auto">
             <MastheadFigures settings={drawing.settings} commands={commands} />
@@ -145,6 +151,7 @@ export function SheetDesk({ room, state, answer: { sheet, team } }: SheetDeskPro
           onLight={light}
           onFrame={bringIntoView}
           onOpen={openSlip}
+          onEditSelected={canEdit ? editSelected : undefined}
         />
       </div>
       <p role="status" className="sr-only">

@@ -26,7 +26,7 @@ export type SolutionStore = {
 const NOTHING_ASKED: SolutionOf = { circuit: undefined, solution: { state: 'pending' } };
 
 /**
- * Solves the newest circuit only: while one is being solved the next waits, a newer one takes its place in the queue, and an
+ * Solves the newest circuit only, and then looks whether it has other operating points: while one is being solved the next waits, a newer one takes its place in the queue, and an
  * answer that is no longer wanted is dropped. A solver that fails is stopped, and started afresh for the next circuit.
  */
 export function createSolutionStore(startSolver: () => Solver): SolutionStore {
@@ -51,7 +51,7 @@ export function createSolutionStore(startSolver: () => Solver): SolutionStore {
     let solution: Solution;
     try {
       solver ??= startSolver();
-      solution = { state: 'current', record: await solver.operatingPoint(circuit) };
+      solution = { state: 'current', record: await solver.firstPoint(circuit) };
     } catch (error) {
       solution = { state: 'failed', reason: failure(error) };
     }
@@ -59,7 +59,26 @@ export function createSolutionStore(startSolver: () => Solver): SolutionStore {
     running = undefined;
     if (solution.state === 'failed') stop();
     if (wanted === circuit) publish({ circuit, solution });
-    else if (wanted) void run(wanted);
+    else if (wanted) return void run(wanted);
+    // Whoever hears of the first answer may already have changed the circuit.
+    if (wanted === circuit && solution.state === 'current') void searchOn(circuit);
+  };
+  /** Asks for what may come after the first answer, and drops it when the circuit has changed since. */
+  const afterwards = async <Answer>(circuit: CircuitFile | undefined, ask: (solver: Solver) => Promise<Answer>) => {
+    const asked = solver;
+    if (!asked || running) return undefined;
+    try {
+      const answer = await ask(asked);
+      return wanted === circuit ? answer : undefined;
+    } catch {
+      // A solver that failed is of no use to the next circuit, which starts another.
+      if (solver === asked && !running) stop();
+      return undefined;
+    }
+  };
+  const searchOn = async (circuit: CircuitFile) => {
+    const record = await afterwards(circuit, (asked) => asked.searchedPoint());
+    if (record) publish({ circuit, solution: { state: 'current', record } });
   };
 
   return {
@@ -75,17 +94,8 @@ export function createSolutionStore(startSolver: () => Solver): SolutionStore {
     },
     latest: () => latest,
     async loadLine(ref, voltages) {
-      const asked = solver;
-      if (!asked || running || latest.solution.state !== 'current') return undefined;
-      const { circuit } = latest;
-      try {
-        const line = await asked.loadLine(ref, voltages);
-        return wanted === circuit ? line : undefined;
-      } catch {
-        // A solver that fails here fails the next circuit too, which then starts another.
-        if (solver === asked && !running) stop();
-        return undefined;
-      }
+      if (latest.solution.state !== 'current') return undefined;
+      return afterwards(latest.circuit, (asked) => asked.loadLine(ref, voltages));
     },
     close() {
       wanted = undefined;

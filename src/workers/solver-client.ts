@@ -6,10 +6,13 @@ import type { SolverWorker } from './solver.worker';
 
 /** A solver on its own thread. It answers a circuit at a time; a rejected answer means that it is of no more use. */
 export type Solver = {
-  operatingPoint(circuit: CircuitFile): Promise<OperatingPointRecord>;
+  /** The operating point without the search for others, which is what a person waits for. */
+  firstPoint(circuit: CircuitFile): Promise<OperatingPointRecord>;
+  /** The record of the circuit solved last once others were searched for; given up like a load line. */
+  searchedPoint(): Promise<OperatingPointRecord | undefined>;
   /**
    * The load that a FET of the circuit solved last sees at `voltages` (V, as magnitudes). Given up, and undefined then, as
-   * soon as anything else is asked for.
+   * soon as another circuit or another line is asked for.
    */
   loadLine(ref: string, voltages: readonly number[]): Promise<LoadLine | undefined>;
   stop(): void;
@@ -42,7 +45,8 @@ export function startSolver(): Solver {
     }
   };
   return {
-    operatingPoint: (circuit) => inTime(remote.operatingPoint(circuit)),
+    firstPoint: (circuit) => inTime(remote.firstPoint(circuit)),
+    searchedPoint: () => inTime(remote.searchedPoint()),
     loadLine: (ref, voltages) => inTime<LoadLine | undefined>(remote.loadLine(ref, voltages)),
     stop: () => worker.terminate(),
   };

@@ -63,6 +63,7 @@ export const ROOMS: Readonly<Record<string, readonly string[]>> = {
 /** The only rooms in which a library is at home; a library that is not listed may be used anywhere. */
 export const HOMES: Readonly<Record<string, readonly string[]>> = {
   reactflow: ['src/features/canvas'],
+  uplot: ['src/features/slip'],
   yjs: ['shared/doc', 'src/live', 'server/sync'],
   'y-websocket': ['src/live'],
   'y-protocols': ['src/live', 'server/sync'],

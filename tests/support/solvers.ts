@@ -1,5 +1,5 @@
 import { loadLine } from '#shared/analyses/load-line';
-import { operatingPoint } from '#shared/analyses/operating-point';
+import { firstOperatingPoint, operatingPoint } from '#shared/analyses/operating-point';
 import type { CircuitFile } from '#shared/circuit/circuit-file';
 import { readCircuit } from '#shared/circuit/read-circuit';
 import type { Solver } from '../../src/workers/solver-client';
@@ -8,10 +8,11 @@ import type { Solver } from '../../src/workers/solver-client';
 export function solverHere(): Solver {
   let last: CircuitFile | undefined;
   return {
-    operatingPoint: async (circuit) => {
+    firstPoint: async (circuit) => {
       last = circuit;
-      return operatingPoint(circuit);
+      return firstOperatingPoint(circuit).record;
     },
+    searchedPoint: async () => operatingPoint(last),
     loadLine: async (ref, voltages) => {
       const read = readCircuit(last);
       return read.ok ? loadLine(read.circuit, operatingPoint(last), ref, voltages) : undefined;
@@ -24,8 +25,8 @@ export function solverHere(): Solver {
 export function solverThatStalls(): Solver {
   let asked = 0;
   return {
-    operatingPoint: (circuit) =>
-      asked++ === 0 ? Promise.resolve(operatingPoint(circuit)) : new Promise(() => undefined),
+    firstPoint: (circuit) => (asked++ === 0 ? Promise.resolve(operatingPoint(circuit)) : new Promise(() => undefined)),
+    searchedPoint: async () => undefined,
     loadLine: () => new Promise(() => undefined),
     stop: () => undefined,
   };

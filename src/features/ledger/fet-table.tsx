@@ -7,7 +7,8 @@ import { REGION_COLOUR, RegionGlyph } from '../../formats/region-glyph';
 import { VERDICT_TEXT, VerdictShape } from '../../formats/verdict-shape';
 import { bySlack, type FetRow, marginOf } from './fet-rows';
 import { figures } from './figure-cells';
-import { type LedgerColumn, LedgerTable, type RowActions } from './ledger-table';
+import type { LedgerColumn } from './ledger-column';
+import { LedgerTable, type RowActions } from './ledger-table';
 
 /** Letters of the longest region's name. */
 const LONGEST_REGION = 9;

@@ -1,6 +1,6 @@
 import { formatValue } from '#shared/units/format-value';
 import { figureColumn } from '../../formats/figures';
-import type { LedgerColumn } from './ledger-table';
+import type { LedgerColumn } from './ledger-column';
 
 /** A column of figures under one prefix, in line on the decimal mark. Rows without the figure sort last. */
 export function figures<Row>(

@@ -1,5 +1,5 @@
 import type { KeyboardEvent, MouseEvent } from 'react';
-import type { LedgerColumn } from './ledger-table';
+import type { LedgerColumn } from './ledger-column';
 
 /** A row of the ledger; its name is its one stop for the keyboard. */
 export function LedgerRow<Row>({
@@ -34,7 +34,7 @@ export function LedgerRow<Row>({
     >
       <th
         scope="row"
-        className={`sticky left-0 z-10 h-6 pr-4 pl-4 group-focus-within:bg-sheet group-hover:bg-sheet sm:pl-6 ${
+        className={`sticky left-0 z-10 h-6 pr-4 pl-4 group-focus-within:z-[11] group-focus-within:bg-sheet group-hover:bg-sheet sm:pl-6 ${
           isSelected ? 'bg-sheet shadow-[inset_3px_0_var(--focus)]' : 'bg-paper'
         }`}
       >

@@ -1,21 +1,9 @@
 import { type KeyboardEvent, type MouseEvent, memo, type ReactNode, useMemo, useState } from 'react';
 import type { PartId } from '#shared/circuit/drawing';
+import type { LedgerColumn } from './ledger-column';
 import { LedgerRow } from './ledger-row';
 import { type Choice, choiceOf, chosen } from './row-selection';
 import { SortMark } from './sort-mark';
-
-export type LedgerColumn<Row> = {
-  readonly key: string;
-  readonly head: ReactNode;
-  /** What the head says, where it is no plain text. */
-  readonly headText?: string;
-  readonly cell: (row: Row) => ReactNode;
-  /** The cell's figure at length, for a hover. */
-  readonly precise?: (row: Row) => string | undefined;
-  readonly compare: (a: Row, b: Row) => number;
-  /** Rows without the figure come last whichever way the column sorts. */
-  readonly isMissing?: (row: Row) => boolean;
-};
 
 export type RowActions = {
   /** The pointer or the focus is on the row of this part, or on none. */

@@ -3,7 +3,8 @@ import { catalogueEntry } from '#shared/circuit/catalogue';
 import type { PartId } from '#shared/circuit/drawing';
 import { byReference } from '#shared/circuit/reference-order';
 import { figures } from './figure-cells';
-import { type LedgerColumn, LedgerTable, type RowActions } from './ledger-table';
+import type { LedgerColumn } from './ledger-column';
+import { LedgerTable, type RowActions } from './ledger-table';
 import type { NetRow, PartRow } from './part-rows';
 
 type Common = { selected: ReadonlySet<PartId> } & RowActions;

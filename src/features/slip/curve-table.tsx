@@ -24,7 +24,7 @@ export function CurveTable({ view: { curve, load, point } }: { view: DeviceView 
       <thead className="text-faint shadow-[inset_0_-1px_var(--rule)]">
         <tr>
           {columns.map(({ name, unit }) => (
-            <th key={name} scope="col" className="pr-3 pb-0.5 last:pr-0">
+            <th key={name} scope="col" className="whitespace-normal pr-3 pb-0.5 align-bottom last:pr-0">
               {name} / {unit}
             </th>
           ))}

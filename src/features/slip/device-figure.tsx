@@ -36,10 +36,11 @@ export function DeviceFigure({
         aria-pressed={asTable}
         aria-keyshortcuts="t"
         title="The numbers of the curve (t)"
-        className="-top-1 absolute right-0 z-10 min-h-6 bg-sheet pl-2 text-faint underline decoration-edge underline-offset-4 hover:text-ink"
+        className="absolute top-0 right-0 z-10 min-h-6 bg-sheet pl-2 text-faint hover:text-ink"
         onClick={() => onTable(!asTable)}
       >
-        {asTable ? 'curve' : 'table'} <kbd className="no-underline">t</kbd>
+        <span className="underline decoration-edge underline-offset-4">{asTable ? 'curve' : 'table'}</span>{' '}
+        <kbd className="border border-edge px-1">t</kbd>
       </button>
       {asTable ? (
         <div className="pt-8">

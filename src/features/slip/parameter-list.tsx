@@ -34,7 +34,7 @@ export function ParameterList({
         {own > 0 && <span className="font-bold text-ink">{own} of its own</span>}
       </button>
       {open && (
-        <div id={id} className="grid grid-cols-[5rem_minmax(0,1fr)_0_auto] items-baseline gap-y-1 pt-1">
+        <div id={id} className="grid grid-cols-[4.75rem_7.5rem_0_minmax(0,1fr)] items-baseline gap-y-1.5 pt-1">
           {parametersOf(part, processes).map((parameter) => (
             <ParameterRow
               key={parameter.name}
@@ -85,7 +85,7 @@ function ParameterRow({
           <span className={`col-span-2 ${weight}`}>{text(own ?? fromProcess)}</span>
         </>
       )}
-      <span className="flex min-h-6 items-center pl-3" title={meaning}>
+      <span className="-my-1 flex min-h-4 items-center pl-3" title={meaning}>
         {own === undefined ? (
           <span className="sr-only">{meaning}</span>
         ) : (

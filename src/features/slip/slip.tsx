@@ -64,7 +64,7 @@ export function Slip({ part, settings, nets, commands, onClose, editors = NOBODY
         aria-label={`${name}: values`}
         onKeyDown={press}
         className={`relative isolate text-xs shadow-slip outline-none ${
-          isFet(part) ? 'w-[17rem] @min-[31rem]:w-[29rem]' : 'w-60'
+          isFet(part) ? 'w-[17rem] @min-[32rem]:w-[30.25rem]' : 'w-60'
         } ${flagged ? '' : 'border border-edge bg-sheet'}`}
       >
         {flagged && <VerdictOutline verdict={flagged} />}
@@ -83,13 +83,11 @@ export function Slip({ part, settings, nets, commands, onClose, editors = NOBODY
             </button>
           </header>
           {isFet(part) ? (
-            <div className="grid items-start gap-x-5 gap-y-2 @min-[31rem]:grid-cols-[11rem_15rem]">
-              <div>
-                {fields}
-                <VerdictLine part={part} />
-              </div>
+            <div className="grid items-start gap-x-5 gap-y-2 @min-[32rem]:grid-cols-[12.25rem_15rem]">
+              {fields}
               <DeviceFigure part={part} asTable={asTable} onTable={setAsTable} />
-              <div className="@min-[31rem]:col-span-2">
+              <div className="@min-[32rem]:col-span-2">
+                <VerdictLine part={part} />
                 <ParameterList part={part} settings={settings} commands={commands} />
               </div>
             </div>

@@ -15,7 +15,7 @@ export function VerdictLine({ part }: { part: DrawnFet }) {
   return (
     <p
       aria-busy={busy}
-      className={`flex items-center gap-2 pt-2 ${verdict === 'met' ? 'text-ink' : 'text-missed'} ${dimmed(busy)}`}
+      className={`flex items-center gap-2 ${verdict === 'met' ? 'text-ink' : 'text-missed'} ${dimmed(busy)}`}
     >
       <VerdictShape verdict={verdict} />
       <span>

@@ -25,7 +25,7 @@ function heldSolvers() {
   const stopped = vi.fn();
   const start = vi.fn(
     (): Solver => ({
-      operatingPoint: (circuit) =>
+      firstPoint: (circuit) =>
         new Promise<OperatingPointRecord>((resolve, reject) => {
           asked.push({
             circuit,
@@ -33,6 +33,7 @@ function heldSolvers() {
             die: (why) => reject(new Error(why)),
           });
         }),
+      searchedPoint: async () => undefined,
       loadLine: () => new Promise(() => undefined),
       stop: stopped,
     }),
