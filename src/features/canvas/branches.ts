@@ -1,6 +1,6 @@
 import { type Drawing, type DrawnComponent, isComponent } from '#shared/circuit/drawing';
 import { type DrawnNets, terminalKey } from '#shared/circuit/nets';
-import { GRID, type GridPoint } from '#shared/geometry/place';
+import { GRID, type GridPoint, samePoint } from '#shared/geometry/place';
 import type { SheetGeometry } from './sheet-geometry';
 import { type Directions, DOWN, LEFT, pointKey, RIGHT, UP, type WireGraph, wayOf } from './wire-graph';
 
@@ -10,6 +10,8 @@ export type Branch = {
   readonly pin: string;
   readonly net: string;
   readonly line: readonly GridPoint[];
+  /** The part on whose terminal the branch ends, if it ends on one alone: its current is the same. */
+  readonly to: DrawnComponent | undefined;
 };
 
 type Way = { readonly bit: number; readonly back: number; readonly step: GridPoint };
@@ -34,9 +36,27 @@ export function branches(drawing: Drawing, geometry: SheetGeometry, graph: WireG
     // A terminal that others touch, or from which two wires leave, has no branch of its own.
     if (!points || !here || here.terminals > 1 || here.leads !== wayOf({ x: -leaves.x, y: -leaves.y })) continue;
     const line = walk(at, here, points, ends, walked);
-    if (line) found.push({ part, pin: end.pin, net, line });
+    if (line) found.push({ part, pin: end.pin, net, line, to: endOf(line, points, geometry, nets, net) });
   }
   return found;
+}
+
+function endOf(
+  line: readonly GridPoint[],
+  points: ReadonlyMap<number, Directions>,
+  geometry: SheetGeometry,
+  { netOf }: DrawnNets,
+  net: string,
+): DrawnComponent | undefined {
+  const at = line[line.length - 1] as GridPoint;
+  const here = points.get(pointKey(at));
+  if (here?.terminals !== 1 || onlyWay(here.wires) === undefined) return undefined;
+  for (const [key, terminal] of geometry.terminals) {
+    const { part, end } = terminal;
+    if (netOf.get(key) !== net || !samePoint(terminal.at, at) || !isComponent(part)) continue;
+    return carries(part, end.pin) ? part : undefined;
+  }
+  return undefined;
 }
 
 function carries({ kind }: DrawnComponent, pin: string): boolean {

@@ -34,7 +34,7 @@ const LEFT: GridPoint = { x: -1, y: 0 };
 const ABOVE: GridPoint = { x: 0, y: -1 };
 const BELOW: GridPoint = { x: 0, y: 1 };
 
-/** For each branch with a free stretch, where its arrowhead and figure stand: over no symbol, text or other wire. */
+/** For each part with a free branch, where arrowhead and figure stand: over no symbol, text or other wire. */
 export function currentSpots(
   drawing: Drawing,
   geometry: SheetGeometry,
@@ -54,14 +54,27 @@ export function currentSpots(
   }
   for (const wire of wireBoxes(drawing, geometry, nets)) taken.add(wire);
   const found: CurrentSpot[] = [];
-  for (const branch of branches(drawing, geometry, graph, nets)) {
+  const told = new Set<DrawnComponent>();
+  const roomiest = branches(drawing, geometry, graph, nets).sort((a, b) => lengthOf(b.line) - lengthOf(a.line));
+  for (const branch of roomiest) {
+    // What flows into a part flows out of it: one figure tells both its wires, and both parts of a wire between two.
+    const ends = branch.to ? [branch.part, branch.to] : [branch.part];
+    if (ends.every((part) => told.has(part))) continue;
     const spot = best(branch, taken, gaps);
     if (!spot) continue;
+    for (const part of ends) told.add(part);
     found.push(spot);
     taken.add(figureBox(spot));
     gaps.add(arrowBox(spot.at));
   }
   return found;
+}
+
+function lengthOf(line: readonly GridPoint[]): number {
+  return line.slice(1).reduce((sum, { x, y }, i) => {
+    const from = line[i] as GridPoint;
+    return sum + Math.abs(x - from.x) + Math.abs(y - from.y);
+  }, 0);
 }
 
 function best({ part, pin, net, line }: Branch, taken: BoxIndex, gaps: BoxIndex): CurrentSpot | undefined {

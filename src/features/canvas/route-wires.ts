@@ -1,7 +1,7 @@
 import { type Drawing, type DrawnPart, isFet, type Wire, type WireId } from '#shared/circuit/drawing';
 import { type DrawnNets, terminalKey } from '#shared/circuit/nets';
 import { around, hungBox, widened } from '#shared/geometry/box';
-import type { GridPoint } from '#shared/geometry/place';
+import { type GridPoint, samePoint } from '#shared/geometry/place';
 import { routeAround } from '#shared/geometry/route-around';
 import { type RouteEnd, routeWire } from '#shared/geometry/route-wire';
 import { RoutingField } from '#shared/geometry/routing-field';
@@ -49,7 +49,8 @@ export function routeWires(
   }
   if (open.length === 0) return routes;
 
-  const field = fieldOf([...parts], [...ends.values(), ...lines.flatMap(({ line }) => line).map((at) => ({ at }))]);
+  const marks = [...parts].filter((part) => !standsOnWire(part, drawing, ends));
+  const field = fieldOf(marks, [...ends.values(), ...lines.flatMap(({ line }) => line).map((at) => ({ at }))]);
   for (const [key, { at }] of ends) field.addTerminal(at, numberOf(key));
   for (const { line, net } of lines) field.addWire(line, net);
   // Short ones first: they have the least choice.
@@ -60,6 +61,14 @@ export function routeWires(
     field.addWire(line, net);
   }
   return routes;
+}
+
+/** A net name that stands on a wire or another terminal is written into the wire and is in nobody's way. */
+function standsOnWire({ id, kind }: DrawnPart, { wires }: Drawing, ends: ReadonlyMap<string, RouteEnd>): boolean {
+  if (kind !== 'net-name') return false;
+  const at = ends.get(terminalKey({ part: id, pin: 'net' }))?.at;
+  if (wires.filter(({ from, to }) => from.part === id || to.part === id).length >= 2) return true;
+  return at !== undefined && [...ends.values()].filter((end) => samePoint(end.at, at)).length >= 2;
 }
 
 function fieldOf(parts: readonly DrawnPart[], points: readonly { at: GridPoint }[]): RoutingField {

@@ -74,3 +74,13 @@ test('a part under the hand takes its wires along, and what lies still stays the
   for (const { from, to: end } of changed) expect([from.part, end.part]).toContain(moved.id);
   expect(after.parts.get(moved.id)?.place).toEqual(to);
 });
+
+test('a name written into a wire is in no wire’s way', () => {
+  const parts = [
+    drawn('a', 'resistor', 0, 0, { ...R, ref: 'R1' }),
+    drawn('b', 'resistor', 0, 200, { ...R, ref: 'R2' }),
+    drawn('n', 'net-name', 0, 100, { values: { net: 'mid' }, place: { x: 0, y: 100, turn: 3, flip: false } }),
+  ];
+  const { geometry } = graphOf(drawingWith(parts, [wired('w1', 'a.b', 'n.net'), wired('w2', 'n.net', 'b.a')]));
+  for (const line of geometry.routes.values()) expect(line).toHaveLength(2);
+});
