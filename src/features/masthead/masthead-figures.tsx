@@ -2,7 +2,6 @@ import { ABSOLUTE_ZERO } from '#shared/circuit/circuit-file';
 import type { SheetSettings } from '#shared/circuit/drawing';
 import { formatExact, formatValue } from '#shared/units/format-value';
 import { type ParsedValue, parseValue } from '#shared/units/parse-value';
-import { dimmed } from '../../formats/dimmed';
 import type { SheetCommands } from '../../live/sheet-commands';
 import { ValueField } from '../../ui/value-field';
 import { useSolution, useSolvedCircuit } from '../../workers/solution';
@@ -20,7 +19,7 @@ export function MastheadFigures({ settings, commands }: { settings: SheetSetting
   return (
     <div className="flex flex-wrap items-center gap-x-5 gap-y-1">
       <Temperature celsius={settings.temperature} commands={commands} />
-      <div aria-busy={busy} className={`flex flex-wrap items-center gap-x-5 gap-y-1 ${dimmed(busy)}`}>
+      <div aria-busy={busy} className={`contents *:transition-opacity ${busy ? '*:opacity-45 *:delay-150' : ''}`}>
         {summary && summary.power > 0 && (
           <p
             className="whitespace-nowrap"

@@ -36,8 +36,8 @@ export const PARAMETERS: readonly Parameter[] = [
   written('surfacePotential', '2φF', 'V', 0, 'surface potential', above0),
   written('thresholdTempco', 'dVT/dT', 'mV/K', -3, 'how much the threshold’s size falls with each kelvin'),
   written('mobilityExponent', 'µ exp.', '', 0, 'power of temperature by which mobility falls'),
-  written('pelgromVt', 'A_VT', 'mV·µm', -9, 'mismatch of thresholds (Pelgrom)', orMore),
-  written('pelgromBeta', 'A_β', '%·µm', -8, 'mismatch of kn (Pelgrom)', orMore),
+  written('pelgromVt', 'AVT', 'mV·µm', -9, 'mismatch of thresholds (Pelgrom)', orMore),
+  written('pelgromBeta', 'Aβ', '%·µm', -8, 'mismatch of kn (Pelgrom)', orMore),
 ];
 
 /** What the device's process says of a parameter; undefined where it says nothing. */
