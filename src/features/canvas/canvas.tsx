@@ -123,6 +123,7 @@ function Board(props: CanvasProps) {
     geometry,
     commands,
     selection,
+    several,
     get selectedAtPress() {
       return selectedAtPress.current;
     },

@@ -19,6 +19,8 @@ export type Desk = {
   readonly wiresAt: (end: WireEnd) => Selection['wires'];
   readonly commands: SheetCommands;
   readonly selection: Selection;
+  /** Clicks add to the selection and take from it without a key held. */
+  readonly several: boolean;
   /** The selection before the pointer was last pressed, which itself selects. */
   readonly selectedAtPress: Selection;
   readonly placing: PlacingHands;

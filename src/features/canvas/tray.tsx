@@ -1,4 +1,4 @@
-import { CircleQuestionMark, Ellipsis, Maximize, Search } from 'lucide-react';
+import { CircleQuestionMark, Maximize, Search } from 'lucide-react';
 import { type PointerEvent as ReactPointerEvent, useRef } from 'react';
 import { useViewport } from 'reactflow';
 import { CATALOGUE, type CatalogueEntry } from '#shared/circuit/catalogue';
@@ -54,7 +54,6 @@ export function Tray(props: TrayProps) {
         <button
           type="button"
           className="tray-button"
-          aria-label="Actions"
           aria-haspopup="menu"
           title="Actions (a)"
           onClick={(event) => {
@@ -62,7 +61,7 @@ export function Tray(props: TrayProps) {
             props.onActions({ x: left, y: top });
           }}
         >
-          <Ellipsis size={16} strokeWidth={1.5} aria-hidden />
+          actions
         </button>
         <button type="button" className="tray-button" aria-label="Find" title="Find (f)" onClick={props.onFind}>
           <Search size={15} strokeWidth={1.5} aria-hidden />

@@ -31,7 +31,8 @@ export function useFlowChanges(desk: RefObject<Desk>) {
     return {
       onNodesChange(changes: NodeChange[]) {
         const selects = changes.filter((change) => change.type === 'select');
-        if (selects.length > 0) select((parts) => apply(parts, selects));
+        // Without a key to hold, the click decides, once: React Flow reads a touch twice on a slow machine.
+        if (selects.length > 0 && !desk.current.several) select((parts) => apply(parts, selects));
         const places = new Map<PartId, Place>();
         for (const change of changes) {
           if (change.type !== 'position' || !change.dragging || !change.position) continue;
@@ -49,15 +50,28 @@ export function useFlowChanges(desk: RefObject<Desk>) {
       },
       onEdgesChange(changes: EdgeChange[]) {
         const selects = changes.filter((change) => change.type === 'select');
-        if (selects.length > 0) select((_parts, wires) => apply(wires, selects));
+        const taken = desk.current.several ? selects.filter(({ selected }) => selected) : selects;
+        if (taken.length > 0) select((_parts, wires) => apply(wires, taken));
       },
-      /** The first click selects; one on the part already selected opens its slip. */
+      /** The first click selects; one on the part already selected opens its slip, on one of many selects it alone. */
       onPartClick(id: string, event: MouseEvent) {
-        const { selectedAtPress, openSlip } = desk.current;
-        const alone = selectedAtPress.parts.size === 1 && selectedAtPress.wires.size === 0;
-        const plain = !event.shiftKey && !event.ctrlKey && !event.metaKey;
-        if (plain && alone && selectedAtPress.parts.has(asPartId(id))) openSlip(asPartId(id));
+        const { selectedAtPress, several, select, openSlip } = desk.current;
+        const part = asPartId(id);
+        if (event.shiftKey || event.ctrlKey || event.metaKey) return;
+        if (several) {
+          select(toggled(selectedAtPress, part));
+          return;
+        }
+        if (!selectedAtPress.parts.has(part)) return;
+        if (selectedAtPress.parts.size + selectedAtPress.wires.size === 1) openSlip(part);
+        else select({ parts: new Set([part]), wires: new Set() });
       },
     };
   }, [desk]);
+}
+
+function toggled({ parts, wires }: Selection, part: PartId): Selection {
+  const next = new Set(parts);
+  if (!next.delete(part)) next.add(part);
+  return { parts: next, wires };
 }

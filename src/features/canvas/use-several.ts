@@ -1,5 +1,4 @@
 import { type RefObject, useEffect, useState } from 'react';
-import { useStoreApi } from 'reactflow';
 
 /**
  * A way to select many without a key to hold: clicks and touches add to the selection and take from it, and one finger
@@ -7,20 +6,6 @@ import { useStoreApi } from 'reactflow';
  */
 export function useSeveral(board: RefObject<HTMLElement | null>) {
   const [several, setSeveral] = useState(false);
-  const store = useStoreApi();
-  useEffect(() => {
-    if (!several) return;
-    // React Flow knows of held keys alone, and forgets this whenever one is let go of.
-    const insist = () => {
-      if (!store.getState().multiSelectionActive) store.setState({ multiSelectionActive: true });
-    };
-    insist();
-    const stop = store.subscribe(insist);
-    return () => {
-      stop();
-      store.setState({ multiSelectionActive: false });
-    };
-  }, [several, store]);
   useEffect(() => {
     const element = board.current;
     if (!several || !element) return;
