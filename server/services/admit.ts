@@ -17,7 +17,7 @@ export function createAdmit(db: Db, now: () => number): Admit {
     if (!team || !can(team.role, 'open-sheet')) {
       return { admitted: false, code: CLOSE.notAllowed, reason: 'not in this team' };
     }
-    return { admitted: true, role: team.role };
+    return { admitted: true, role: team.role, archived: sheet.archived };
   };
 }
 

@@ -28,7 +28,7 @@ export interface ConnectionHooks {
  */
 export function connect(
   socket: WebSocket,
-  who: Pick<Member, 'person' | 'sessionId' | 'role'>,
+  who: Pick<Member, 'person' | 'sessionId' | 'role' | 'archived'>,
   room: Room,
   hooks: ConnectionHooks,
 ): void {

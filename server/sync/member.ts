@@ -11,6 +11,8 @@ export interface Opener {
 /** One open sheet of one person, as its room knows it. */
 export interface Member extends Opener {
   role: Role;
+  /** Whether the sheet is archived. */
+  archived: boolean;
   send(message: Uint8Array): void;
   close(code: CloseCode, reason: string): void;
 }

@@ -104,10 +104,9 @@ export class Room {
   }
 
   private change(member: Member, update: Uint8Array): void {
-    if (!can(member.role, 'edit-sheet')) {
-      if (!changesNothing(this.doc, update)) {
-        member.send(tellRefused(`not-allowed: as ${member.role} you see this sheet but cannot change it`));
-      }
+    const refusal = refusalOf(member);
+    if (refusal !== undefined) {
+      if (!changesNothing(this.doc, update)) member.send(tellRefused(refusal));
       return;
     }
     if (update.byteLength > LARGEST_UPDATE) {
@@ -170,4 +169,10 @@ export class Room {
   private broadcast(message: Uint8Array, except?: unknown): void {
     for (const member of this.members) if (member !== except) member.send(message);
   }
+}
+
+/** Why this member cannot change the sheet; undefined for those who can. */
+function refusalOf({ role, archived }: Member): string | undefined {
+  if (!can(role, 'edit-sheet')) return `not-allowed: as ${role} you see this sheet but cannot change it`;
+  return archived ? 'archived: this sheet is archived and cannot be changed' : undefined;
 }

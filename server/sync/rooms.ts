@@ -7,9 +7,9 @@ import type { Member } from './member';
 import { Room } from './room';
 import { CLOSE, type CloseCode } from './socket-codes';
 
-/** Whether a session may have a sheet open, and as what. */
+/** Whether a session may have a sheet open, and as what. An archived sheet is only looked at. */
 export type Admission =
-  | { readonly admitted: true; readonly role: Role }
+  | { readonly admitted: true; readonly role: Role; readonly archived: boolean }
   | { readonly admitted: false; readonly code: CloseCode; readonly reason: string };
 export type Admit = (who: { personId: string; sessionId: string }, sheetId: string) => Admission;
 
@@ -78,13 +78,22 @@ export class Rooms {
       }
     }
   }
+  /** To be called when a sheet was archived or brought back. */
+  recheckSheet(sheetId: string): void {
+    const room = this.rooms.get(sheetId);
+    if (room) for (const member of [...room.members]) this.recheckMember(sheetId, room, member);
+  }
+
 
   recheckMember(sheetId: string, room: Room, member: Member): void {
     const admission = this.admit({ personId: member.person.id, sessionId: member.sessionId }, sheetId);
     if (!admission.admitted) {
       this.leave(sheetId, room, member);
       member.close(admission.code, admission.reason);
-    } else if (admission.role !== member.role) {
+      return;
+    }
+    member.archived = admission.archived;
+    if (admission.role !== member.role) {
       member.role = admission.role;
       room.restamp(member);
     }

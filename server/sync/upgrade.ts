@@ -71,7 +71,8 @@ function admitSocket(
   const { person, sessionId } = signedIn;
   try {
     const room = rooms.open(sheetId);
-    connect(socket, { person, sessionId, role: admission.role }, room, {
+    const { role, archived } = admission;
+    connect(socket, { person, sessionId, role, archived }, room, {
       now: deps.now,
       beat: (member, active) => {
         if (active) deps.touch(sessionId);
@@ -83,7 +84,7 @@ function admitSocket(
         rooms.leave(sheetId, room, member);
       },
     });
-    log.info({ ...about, role: admission.role }, 'sheet opened');
+    log.info({ ...about, role }, 'sheet opened');
   } catch (error) {
     log.error({ ...about, err: error }, 'sheet could not be loaded');
     closeSocket(socket, CLOSE.tryLater, 'this sheet cannot be loaded now');

@@ -15,6 +15,7 @@ export const STATUS_OF_CODE = {
   'already-member': 409,
   'last-owner': 409,
   'signed-off': 409,
+  archived: 409,
   'too-large': 413,
   'wrong-content-type': 415,
   invalid: 422,

@@ -29,8 +29,9 @@ const REFUSALS: Readonly<Record<number, Extract<RoomState, { kind: 'refused' }>[
   4404: 'not-found',
 };
 
-/** Why the server dropped a change: this person may only look, or the change was too large. */
-export type Denial = 'not-allowed' | 'too-large';
+/** Why the server dropped a change; its word for that begins with one of these. */
+const DENIALS = ['not-allowed', 'archived', 'too-large'] as const;
+export type Denial = (typeof DENIALS)[number];
 
 /** Opens a sheet. `onDenied` is called when the server dropped a change made here. */
 export function openRoom(sheetId: string, onDenied: (denial: Denial) => void): Room {
@@ -39,7 +40,7 @@ export function openRoom(sheetId: string, onDenied: (denial: Denial) => void): R
   sendOwnPresenceOnly(provider);
   provider.messageHandlers[messageAuth] = (_encoder, decoder) =>
     readAuthMessage(decoder, doc, (_doc, reason) =>
-      onDenied(reason.startsWith('too-large') ? 'too-large' : 'not-allowed'),
+      onDenied(DENIALS.find((denial) => reason.startsWith(denial)) ?? 'not-allowed'),
     );
   const undo = new Y.UndoManager(Object.values(sheetMaps(doc)), {
     trackedOrigins: new Set([OWN_EDIT]),

@@ -39,6 +39,8 @@ const DENIAL_WORDS: Readonly<Record<Denial, string>> = {
   'not-allowed':
     'Your last change was not shared: you may only look at this sheet now. It shows what everyone else sees.',
   'too-large': 'Your last change was too large to share. The sheet shows what everyone else sees: change less at once.',
+  archived:
+    'Your last change was not shared: this sheet was archived, and is to be looked at only. It shows what everyone else sees.',
 };
 
 /** The live connection to a sheet; begun anew after the server refused a change, for then the copy here is not the shared one. */

@@ -93,8 +93,12 @@ describe('a sheet', () => {
     expect(renamed.sheet).toMatchObject({ name: 'Hydrophone input', archived: false, state: 'draft' });
     expect(Date.parse(renamed.sheet.changedAt) - Date.parse(renamed.sheet.createdAt)).toBe(5000);
     await ines.patch(`/api/sheets/${id}`, { archived: true });
+    const refused = await ines.patch(`/api/sheets/${id}`, { name: 'Renamed in the archive' });
+    expect([refused.status, codeOf(refused)]).toEqual([409, 'archived']);
     const { sheets } = sheetsAnswer.parse((await ines.get(`/api/teams/${teamId}/sheets`)).body);
     expect(sheets[0]).toMatchObject({ id, archived: true });
+    const back = await ines.patch(`/api/sheets/${id}`, { archived: false, name: 'Back again' });
+    expect(sheetAnswer.parse(back.body).sheet).toMatchObject({ name: 'Back again', archived: false });
     expect((await ines.patch(`/api/sheets/${id}`, {})).status).toBe(422);
     expect((await ines.patch(`/api/sheets/${id}`, { teamId: 'another' })).status).toBe(422);
   });

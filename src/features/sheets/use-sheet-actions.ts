@@ -40,6 +40,6 @@ export function useSheetActions(team: OwnTeam): { live: SheetActions; archived: 
   const both = { rename: edits, copy: edits ? copy : undefined };
   return {
     live: { ...both, archive: archives ? setArchived(true) : undefined, bringBack: undefined },
-    archived: { ...both, archive: undefined, bringBack: archives ? setArchived(false) : undefined },
+    archived: { ...both, rename: false, archive: undefined, bringBack: archives ? setArchived(false) : undefined },
   };
 }

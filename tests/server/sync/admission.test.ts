@@ -104,6 +104,29 @@ describe('what changes while a sheet is open', () => {
     samir.notes.set('in time', true);
     await vi.waitFor(() => expect(ines.notes.get('in time')).toBe(true), { timeout: 1000 });
   });
+  });
+});
+
+describe('an archived sheet', () => {
+  test('is shown live and changed by nobody, owners included, until it is brought back', async () => {
+    const id = await owner.createSheet(teamId, { starter: 'mirror' });
+    const ines = await new LiveSheet(server, owner, id).synced();
+    const samir = await new LiveSheet(server, designer, id).synced();
+    await owner.patch(`/api/sheets/${id}`, { archived: true });
+    samir.notes.set('too late', true);
+    await vi.waitFor(() => expect(samir.refusals[0]).toMatch(/^archived/), { timeout: 1000 });
+
+    const late = await new LiveSheet(server, owner, id).synced();
+    late.notes.set('later still', true);
+    await vi.waitFor(() => expect(late.refusals[0]).toMatch(/^archived/), { timeout: 1000 });
+    expect(ines.notes.toJSON()).not.toHaveProperty('too late');
+
+    await owner.patch(`/api/sheets/${id}`, { archived: false });
+    ines.notes.set('in time', true);
+    const fresh = await new LiveSheet(server, designer, id).synced();
+    await vi.waitFor(() => expect(fresh.notes.get('in time')).toBe(true));
+    expect(fresh.notes.has('too late') || fresh.notes.has('later still')).toBe(false);
+    expect([...ines.closes, ...samir.closes, ...late.closes]).toEqual([]);
 
   test('somebody removed from the team is cut off within a second', async () => {
     const visitor = await new Visitor(server).signUp('Short Stay', await owner.invite(teamId, 'designer'));
