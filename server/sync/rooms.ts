@@ -57,10 +57,9 @@ export class Rooms {
   /** The sheet as it is now, stored to the last change. */
   drawing(sheetId: string): Drawing {
     const room = this.open(sheetId);
-    const stored = room.flush();
+    if (!room.flush()) throw new Error(`The last changes of sheet ${sheetId} could not be stored.`);
     const { drawing } = readDrawing(room.doc);
     if (room.members.size === 0) this.release(sheetId, room);
-    if (!stored) throw new Error(`The last changes of sheet ${sheetId} could not be stored.`);
     return drawing;
   }
 

@@ -167,6 +167,19 @@ describe('when the disk fails', () => {
     expect(stored(sheetId, fragile.context.db).getMap('sheet').get('count')).toBe(1);
   });
 
+  test('asking for the sheet stores nothing that was refused', async () => {
+    const sheetId = await owner.createSheet(teamId);
+    const { rooms } = fragile.context;
+    const room = rooms.open(sheetId);
+    room.doc.getMap('sheet').set('count', 1);
+    // Two rows: what is longer than one would be shortened on leaving.
+    expect(room.flush()).toBe(true);
+    failing = true;
+    room.doc.getMap('sheet').set('count', 2);
+    expect(() => rooms.drawing(sheetId)).toThrow(/could not be stored/);
+    expect(stored(sheetId, fragile.context.db).getMap('sheet').get('count')).toBe(1);
+  });
+
   test('whoever asks for the document is not told what could not be stored', async () => {
     const sheetId = await owner.createSheet(teamId);
     const { socket, closed } = await rawSocket(fragile, owner, sheetId);
