@@ -12,6 +12,7 @@ import { appendUpdates, compactUpdates, endOfLog, loadUpdates } from './db/queri
 import { findSheet } from './db/queries/sheets';
 import { createSessionAdapter } from './db/session-adapter';
 import { prepareDemo } from './demo/prepare';
+import { senderAddress } from './http/sender-address';
 import { createAdmit, isLive } from './services/admit';
 import type { Context } from './services/context';
 import { createEvents } from './services/events';
@@ -106,6 +107,7 @@ export async function startServer(config: Config, replaced: Replacements = {}): 
     touch,
     identify: (cookieHeader) => sessions.identify(cookieHeader),
     ownOrigins: () => origins,
+    senderAddress: (request) => senderAddress(request, trustProxy),
     log,
     now,
     shareUpgrades: pages.from === 'vite',

@@ -60,6 +60,9 @@ function callOf(request: Request, response: Response): Call {
     body: request.body,
     address: request.ip ?? '',
     signedIn: signedInOf(response),
+    note: (account) => {
+      response.locals.account = account;
+    },
   };
 }
 

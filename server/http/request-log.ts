@@ -25,7 +25,7 @@ export function requestLog(logger: Logger) {
       }),
       res: (response: { statusCode: number }) => ({ status: response.statusCode }),
     },
-    customProps: (_request, response) => ({ person: personOf(response) }),
+    customProps: (_request, response) => whoOf(response),
     customLogLevel: (_request, response, error) =>
       error || response.statusCode >= 500 ? 'error' : response.statusCode >= 400 ? 'warn' : 'info',
   });
@@ -35,6 +35,11 @@ function originalUrl(request: IncomingMessage & { originalUrl?: string }): strin
   return request.originalUrl ?? request.url ?? '';
 }
 
-function personOf(response: ServerResponse & { locals?: { signedIn?: { person: { id: string } } | null } }) {
-  return response.locals?.signedIn?.person.id;
+interface Locals {
+  readonly signedIn?: { readonly person: { readonly id: string } } | null;
+  readonly account?: string;
+}
+
+function whoOf({ locals }: ServerResponse & { locals?: Locals }) {
+  return { person: locals?.signedIn?.person.id, account: locals?.account };
 }

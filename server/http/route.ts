@@ -9,6 +9,8 @@ export interface Call {
   /** The sender's network address. */
   readonly address: string;
   readonly signedIn: SignedIn | null;
+  /** Says in the log's line of this request whose account it is about, where no session tells. */
+  note(account: string): void;
 }
 export type SignedInCall = Call & { readonly signedIn: SignedIn };
 

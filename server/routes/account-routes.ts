@@ -14,8 +14,9 @@ export function accountRoutes(ctx: Context): Route[] {
       path: '/api/sign-up',
       access: 'public',
       perMinute: 60,
-      handle: async ({ body }) => {
-        const { person, setCookie } = await signUp(ctx, parseBody(signUpBody, body));
+      handle: async ({ body, signedIn, note }) => {
+        const { person, setCookie } = await signUp(ctx, parseBody(signUpBody, body), signedIn);
+        note(person.id);
         return { status: 201, body: { person }, setCookie };
       },
     },
@@ -23,8 +24,8 @@ export function accountRoutes(ctx: Context): Route[] {
       method: 'post',
       path: '/api/sign-in',
       access: 'public',
-      handle: async ({ body, address, signedIn }) => {
-        const { person, setCookie } = await signIn(ctx, parseBody(signInBody, body), { address, signedIn });
+      handle: async ({ body, ...from }) => {
+        const { person, setCookie } = await signIn(ctx, parseBody(signInBody, body), from);
         return { status: 200, body: { person }, setCookie };
       },
     },

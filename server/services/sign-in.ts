@@ -3,7 +3,7 @@ import { Refusal } from '#shared/api/refusal';
 import { hashPassword, isWeakHash, verifyPassword } from '../auth/passwords';
 import type { SignedIn } from '../auth/sessions';
 import { KNOWN_FOR, WINDOW, waitBeforeSignIn } from '../auth/throttle';
-import { hashToken } from '../auth/tokens';
+import { hashToken, pseudonym } from '../auth/tokens';
 import { findPersonByEmail, setPasswordHash } from '../db/queries/people';
 import {
   attemptsOnAccount,
@@ -19,10 +19,11 @@ import { endSession } from './sign-out';
 export async function signIn(
   ctx: Context,
   body: SignInBody,
-  from: { address: string; signedIn: SignedIn | null },
+  from: { address: string; signedIn: SignedIn | null; note(account: string): void },
 ): Promise<{ person: Person; setCookie: string }> {
-  const attempt = beginAttempt(ctx, hashToken(body.email), from.address);
   const person = findPersonByEmail(ctx.db, body.email);
+  from.note(person?.id ?? pseudonym(body.email));
+  const attempt = beginAttempt(ctx, hashToken(body.email), from.address);
   const right = await verifyPassword(person?.passwordHash, body.password);
   // One text for an unknown address and for a wrong password: neither tells who has an account.
   if (!person || !right) throw new Refusal('wrong-credentials', 'The address or the password is wrong.');

@@ -18,6 +18,7 @@ export interface UpgradeDeps {
   /** Notes that the session is in use. */
   readonly touch: (sessionId: string) => void;
   readonly ownOrigins: () => ReadonlySet<string>;
+  readonly senderAddress: (request: IncomingMessage) => string;
   readonly log: Logger;
   readonly now: () => number;
   /** Whether somebody else (Vite's hot reload) answers upgrades on other paths. */
@@ -60,7 +61,7 @@ function admitSocket(
   deps: UpgradeDeps,
 ): void {
   const { log, rooms } = deps;
-  const about = { sheet: sheetId, person: signedIn?.person.id, from: request.socket.remoteAddress };
+  const about = { sheet: sheetId, person: signedIn?.person.id, from: deps.senderAddress(request) };
   const admission = admissionOf(request.headers.origin, sheetId, signedIn, deps);
   if (!signedIn || !admission.admitted) {
     const { code, reason } = admission.admitted ? NOT_SIGNED_IN : admission;

@@ -80,6 +80,15 @@ describe('signing in', () => {
     expect((await old.get('/api/me')).status).toBe(401);
   });
 
+  test('up starts a new session too, and ends the one that the browser had', async () => {
+    const visitor = await new Visitor(server).signUp('First Account');
+    const old = new Visitor(server);
+    old.cookie = visitor.cookie;
+    await visitor.signUp('Second Account');
+    expect((await old.get('/api/me')).status).toBe(401);
+    expect((await visitor.get('/api/me')).status).toBe(200);
+  });
+
   test('makes a weak hash strong', async () => {
     const visitor = await new Visitor(server).signUp('Old Hand');
     const weak = await hash(PASSWORD, { memoryCost: 8192, timeCost: 1, parallelism: 1 });

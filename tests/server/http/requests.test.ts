@@ -1,5 +1,7 @@
+import { once } from 'node:events';
 import { request } from 'node:http';
 import { describe, expect, test } from 'vitest';
+import { WebSocket } from 'ws';
 import { errorAnswer } from '#shared/api/errors';
 import { startTestServer, TestLog } from '../support/start-test-server';
 import { codeOf, fieldsOf, PASSWORD, Visitor } from '../support/visitor';
@@ -157,6 +159,40 @@ describe('the log', () => {
       req: { method: 'POST', path: '/api/invitations/look-up', from: '127.0.0.1' },
       res: { status: 200 },
     });
+  });
+
+  test('says whose account a sign-in was for, and no address of somebody unknown', async () => {
+    const lineOf = async (name: string, password: string) => {
+      await new Visitor(server).signIn(name, password);
+      return JSON.parse(log.lines.findLast((line) => line.includes('"/api/sign-in"')) ?? '{}');
+    };
+    expect(await lineOf('Ines Rautio', 'not-the-password')).toMatchObject({
+      account: ines.personId,
+      res: { status: 401 },
+    });
+    const unknown = await lineOf('Nobody Here', 'not-the-password');
+    expect(unknown.account).toMatch(/^unknown-[0-9a-f]{16}$/);
+    expect((await lineOf('Nobody Here', 'another-guess')).account).toBe(unknown.account);
+    expect((await lineOf('Someone Else', 'another-guess')).account).not.toBe(unknown.account);
+    expect(log.lines.join('')).not.toContain('nobody.here');
+  });
+
+  test('names the same sender of a socket as of a request, whatever the proxies before them claim', async () => {
+    const forwarded = '198.51.100.1, 203.0.113.7, 192.0.2.9';
+    for (const [trustProxy, sender] of [
+      [0, '127.0.0.1'],
+      [1, '192.0.2.9'],
+      [2, '203.0.113.7'],
+      [9, '198.51.100.1'],
+    ] as const) {
+      const trusting = await startTestServer({ log: log.logger, trustProxy });
+      const headers = { 'x-forwarded-for': forwarded, origin: trusting.url };
+      await new Visitor(trusting).send('GET', '/api/me', undefined, headers);
+      const socket = new WebSocket(`ws://127.0.0.1:${trusting.port}/sync/none`, { headers });
+      await once(socket, 'close');
+      const [asked, opened] = log.lines.slice(-2).map((line) => JSON.parse(line));
+      expect([asked.req?.from, opened.from], `${trustProxy} proxies`).toEqual([sender, sender]);
+    }
   });
 
   test('believes a forwarded address only where a proxy is trusted', async () => {
