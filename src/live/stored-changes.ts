@@ -34,8 +34,10 @@ export class StoredChanges {
     if (!readSync) throw new Error('y-websocket has no handler for sync messages');
     provider.messageHandlers[messageSync] = (encoder, decoder, ...rest) => {
       const kind = decoding.peekVarUint(decoder);
+      // The first answer of a connection makes it synced and so asks for a receipt; it is none itself.
+      const asked = this.#asked;
       readSync(encoder, decoder, ...rest);
-      if (kind === messageYjsSyncStep2) this.#receipt();
+      if (kind === messageYjsSyncStep2 && asked !== undefined) this.#receipt(asked);
     };
   }
 
@@ -57,9 +59,8 @@ export class StoredChanges {
     });
   }
 
-  #receipt(): void {
-    if (this.#asked === undefined) return;
-    this.#notStored -= this.#asked;
+  #receipt(asked: number): void {
+    this.#notStored -= asked;
     this.#asked = undefined;
     this.#onChange();
     this.#ask();
