@@ -31,7 +31,13 @@ export function createEvents(sessionLives: (sessionId: string) => boolean): Even
       };
     },
     tell(personIds, event) {
-      for (const id of new Set(personIds)) for (const listener of of(id)) listener.send(event);
+      for (const id of new Set(personIds)) {
+        for (const listener of of(id)) {
+          // Sessions also end by time, of which nobody is told.
+          if (sessionLives(listener.sessionId)) listener.send(event);
+          else listener.end();
+        }
+      }
     },
     recheck(personId) {
       for (const listener of of(personId)) if (!sessionLives(listener.sessionId)) listener.end();

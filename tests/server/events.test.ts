@@ -2,10 +2,11 @@ import { describe, expect, onTestFinished, test, vi } from 'vitest';
 import { type ChangeEvent, changeEvent } from '#shared/api/events';
 import { setTemperature } from '#shared/doc/commands';
 import { LiveSheet } from './support/live-sheet';
-import { startTestServer } from './support/start-test-server';
+import { startTestServer, TestClock } from './support/start-test-server';
 import { assembleTeam, type Visitor } from './support/visitor';
 
-const server = await startTestServer();
+const clock = new TestClock();
+const server = await startTestServer({ now: clock.now });
 const { teamId, owner, designer, viewer, outsider } = await assembleTeam(server);
 
 interface Stream {
@@ -77,5 +78,18 @@ describe('the stream of events', () => {
     const stream = await listen(outsider);
     await outsider.post('/api/sign-out');
     await vi.waitFor(() => expect(stream.ended).toBe(true));
+  });
+
+  test('ends with a session whose time is over, and tells it nothing more', async () => {
+    const [away, here] = [await listen(viewer), await listen(owner)];
+    const day = 24 * 3_600_000;
+    for (let days = 0; days < 4; days += 1) {
+      clock.pass(day);
+      await owner.get('/api/me');
+    }
+    const sheetId = await owner.createSheet(teamId);
+    await vi.waitFor(() => expect(here.events).toContainEqual({ kind: 'sheet', teamId, sheetId }));
+    await vi.waitFor(() => expect(away.ended).toBe(true));
+    expect(away.events).toEqual([]);
   });
 });
