@@ -76,6 +76,21 @@ describe('who may only look', () => {
     expect(fresh.notes.has('mark')).toBe(false);
   });
 
+  test('are told too of a deletion that lies between two others', async () => {
+    const ines = await new LiveSheet(server, owner, sheetId).synced();
+    for (const name of ['left', 'middle', 'right']) ines.notes.set(name, 1);
+    ines.notes.delete('left');
+    ines.notes.delete('right');
+    const watching = await new LiveSheet(server, viewer, sheetId).synced();
+    expect(watching.notes.get('middle')).toBe(1);
+    watching.notes.delete('middle');
+    watching.provider.disconnect();
+    watching.refusals.length = 0;
+    watching.provider.connect();
+    await vi.waitFor(() => expect(watching.refusals[0]).toMatch(/^not-allowed/), { timeout: 5000 });
+    expect(ines.notes.get('middle')).toBe(1);
+  });
+
   test('are not told off when they come back with nothing of their own', async () => {
     const ines = await new LiveSheet(server, owner, sheetId).synced();
     const watching = await new LiveSheet(server, viewer, sheetId).synced();
@@ -89,21 +104,6 @@ describe('who may only look', () => {
     ines.notes.set('last', 'of all');
     await vi.waitFor(() => expect(watching.notes.get('last')).toBe('of all'));
     expect(watching.refusals).toEqual([]);
-  });
-});
-
-describe('what changes while a sheet is open', () => {
-  test('a designer made a viewer can look on, but not draw, within a second', async () => {
-    const ines = await new LiveSheet(server, owner, sheetId).synced();
-    const samir = await new LiveSheet(server, designer, sheetId).synced();
-    await owner.patch(member(designer), { role: 'viewer' });
-    samir.notes.set('too late', true);
-    await vi.waitFor(() => expect(samir.refusals[0]).toMatch(/^not-allowed: as viewer/), { timeout: 1000 });
-    expect([samir.closes, ines.notes.has('too late')]).toEqual([[], false]);
-    await owner.patch(member(designer), { role: 'designer' });
-    samir.notes.set('in time', true);
-    await vi.waitFor(() => expect(ines.notes.get('in time')).toBe(true), { timeout: 1000 });
-  });
   });
 });
 
@@ -127,6 +127,21 @@ describe('an archived sheet', () => {
     await vi.waitFor(() => expect(fresh.notes.get('in time')).toBe(true));
     expect(fresh.notes.has('too late') || fresh.notes.has('later still')).toBe(false);
     expect([...ines.closes, ...samir.closes, ...late.closes]).toEqual([]);
+  });
+});
+
+describe('what changes while a sheet is open', () => {
+  test('a designer made a viewer can look on, but not draw, within a second', async () => {
+    const ines = await new LiveSheet(server, owner, sheetId).synced();
+    const samir = await new LiveSheet(server, designer, sheetId).synced();
+    await owner.patch(member(designer), { role: 'viewer' });
+    samir.notes.set('too late', true);
+    await vi.waitFor(() => expect(samir.refusals[0]).toMatch(/^not-allowed: as viewer/), { timeout: 1000 });
+    expect([samir.closes, ines.notes.has('too late')]).toEqual([[], false]);
+    await owner.patch(member(designer), { role: 'designer' });
+    samir.notes.set('in time', true);
+    await vi.waitFor(() => expect(ines.notes.get('in time')).toBe(true), { timeout: 1000 });
+  });
 
   test('somebody removed from the team is cut off within a second', async () => {
     const visitor = await new Visitor(server).signUp('Short Stay', await owner.invite(teamId, 'designer'));
