@@ -4,9 +4,10 @@ import { readMessage } from './messages';
 import type { Room } from './room';
 import { CLOSE, type CloseCode } from './socket-codes';
 
-/** Messages a second in the long run, and in one burst. */
+/** Messages a second in the long run, and in one burst; a long one counts as one for each of its parts of this length. */
 const RATE = 200;
 const BURST = 600;
+const PART = 16_384;
 /** Bytes that may wait for a slow reader. */
 const MOST_BUFFERED = 8 * 1_048_576;
 const PING_EVERY = 25_000;
@@ -46,7 +47,8 @@ export function connect(
 
   socket.on('message', (data, isBinary) => {
     if (socket.readyState !== socket.OPEN) return;
-    if (!withinRate()) {
+    const frame = bytesOf(data);
+    if (!withinRate(Math.max(1, frame.byteLength / PART))) {
       member.close(CLOSE.tryLater, 'too many messages');
       return;
     }
@@ -55,7 +57,7 @@ export function connect(
       return;
     }
     try {
-      const message = readMessage(bytesOf(data));
+      const message = readMessage(frame);
       active ||= message.kind === 'update';
       room.receive(member, message);
     } catch (error) {
@@ -92,14 +94,15 @@ function bytesOf(data: RawData): Uint8Array {
   return data instanceof ArrayBuffer ? new Uint8Array(data) : data;
 }
 
-function createBucket(now: () => number): () => boolean {
+/** Whether a message of this weight is within the rate; it counts either way. */
+function createBucket(now: () => number): (weight: number) => boolean {
   let tokens = BURST;
   let last = now();
-  return () => {
+  return (weight) => {
     const at = now();
     tokens = Math.min(BURST, tokens + ((at - last) / 1000) * RATE);
     last = at;
-    tokens -= 1;
+    tokens -= weight;
     return tokens >= 0;
   };
 }

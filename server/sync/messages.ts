@@ -33,6 +33,8 @@ export type ClientMessage =
 
 /** Presences in one message: a client tells of itself, and may pass on what it heard of the others. */
 const MOST_PRESENCES = 1000;
+/** The highest clock taken: the server counts on from it, and beyond 2^53 nobody could read what it sends. */
+const HIGHEST_CLOCK = 2 ** 32;
 
 /** Reads a frame. Throws on anything that is not a message of the protocol. */
 export function readMessage(frame: Uint8Array): ClientMessage {
@@ -72,6 +74,7 @@ function readPresences(content: Uint8Array): Presence[] {
   return Array.from({ length: count }, () => {
     const clientId = decoding.readVarUint(decoder);
     const clock = decoding.readVarUint(decoder);
+    if (clock > HIGHEST_CLOCK) throw new Error(`a presence at clock ${clock}`);
     const state: unknown = JSON.parse(decoding.readVarString(decoder));
     if (typeof state !== 'object' || Array.isArray(state)) throw new Error('a presence that is no object');
     return { clientId, clock, state: state && { ...state } };

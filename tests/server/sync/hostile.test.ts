@@ -39,6 +39,7 @@ describe('what no client would send', () => {
     ['a frame that ends too early', new Uint8Array([0, 2, 200, 1]), 1007],
     ['an update of noise', UPDATE(new Uint8Array([255, 254, 253, 252, 251, 7, 7, 7])), 1007],
     ['presence that is no JSON object', PRESENCE(5, 1, ['x']), 1007],
+    ['presence beyond every clock', PRESENCE(5, Number.MAX_SAFE_INTEGER, {}), 1007],
     ['a frame beyond 2 MiB', new Uint8Array(2 * 1_048_576 + 1), 1009],
   ])('%s ends that socket and disturbs nobody else', async (_what, frame, code) => {
     const samir = await new LiveSheet(server, designer, sheetId).synced();
@@ -67,6 +68,15 @@ describe('what no client would send', () => {
     for (let i = 0; i < 2000; i += 1) socket.send(new Uint8Array([3]));
     expect(await closed).toBe(1013);
     expect(samir.closes).toEqual([]);
+  });
+
+  test('a flood of few but long frames is one too', async () => {
+    const { socket, closed } = await rawSocket(server, owner, sheetId);
+    // An update that says nothing, in a frame with much behind it.
+    const frame = new Uint8Array(2_000_000);
+    frame.set(UPDATE(Y.encodeStateAsUpdate(new Y.Doc())));
+    for (let i = 0; i < 20; i += 1) socket.send(frame);
+    expect(await closed).toBe(1013);
   });
 
   test('a change that builds on one that is missing is asked for, not lost', async () => {
