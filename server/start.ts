@@ -112,7 +112,13 @@ export async function startServer(config: Config, replaced: Replacements = {}): 
     now,
     shareUpgrades: pages.from === 'vite',
   });
-  const chores = setInterval(() => keepHouse(db, now()), HOUR);
+  const chores = setInterval(() => {
+    try {
+      keepHouse(db, now());
+    } catch (error) {
+      log.error({ err: error }, 'the hourly clearing up failed');
+    }
+  }, HOUR);
 
   return {
     url,

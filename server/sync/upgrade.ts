@@ -76,8 +76,12 @@ function admitSocket(
     connect(socket, { person, sessionId, role, archived }, room, {
       now: deps.now,
       beat: (member, active) => {
-        if (active) deps.touch(sessionId);
-        rooms.recheckMember(sheetId, room, member);
+        try {
+          if (active) deps.touch(sessionId);
+          rooms.recheckMember(sheetId, room, member);
+        } catch (error) {
+          log.error({ ...about, err: error }, 'a session could not be looked up');
+        }
       },
       puzzled: (error) => log.warn({ ...about, err: error }, 'a message could not be understood'),
       left: (member) => {
