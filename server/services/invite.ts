@@ -12,13 +12,13 @@ const GOOD_FOR = 7 * 24 * 3_600_000;
 export function invite(
   ctx: Context,
   teamId: string,
-  { email = null, role }: Omit<CreateInvitationBody, 'email'> & { email?: string | null | undefined },
+  { email, role }: CreateInvitationBody,
   asker: Person,
 ): { invitation: Invitation; link: string } {
   const team = requireTeam(ctx.db, teamId, asker.id, 'manage-members');
   const token = newToken();
   const createdAt = ctx.now();
-  const row = { id: newId(), teamId, email, role, createdAt, expiresAt: createdAt + GOOD_FOR };
+  const row = { id: newId(), teamId, email: email ?? null, role, createdAt, expiresAt: createdAt + GOOD_FOR };
   insertInvitation(ctx.db, { ...row, tokenHash: hashToken(token), invitedBy: asker.id });
   return {
     invitation: invitationAnswerOf({ ...row, team: team.name, invitedBy: asker.name }),

@@ -33,11 +33,7 @@ export function sheetsOf(db: Db, teamId: string): SheetRow[] {
     .all();
 }
 
-export function updateSheet(
-  db: Db,
-  id: string,
-  changes: { name?: string; archived?: boolean; changedAt?: number },
-): void {
+export function updateSheet(db: Db, id: string, changes: { name: string; archived: boolean; changedAt: number }): void {
   db.update(sheets).set(changes).where(eq(sheets.id, id)).run();
 }
 
