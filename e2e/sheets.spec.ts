@@ -4,6 +4,9 @@ import { openWindow, signIn } from './fixtures/people';
 import { SheetPage } from './fixtures/sheet-page';
 import { Served } from './support/served';
 
+// Two people at once, each in a browser window of their own.
+test.describe.configure({ timeout: 120_000 });
+
 let served: Served;
 
 test.beforeAll(async () => {
@@ -122,12 +125,44 @@ test('pages that cannot be shown say why and lead on', async ({ browser }) => {
   await expect(page.getByRole('heading', { name: 'There is nothing here' })).toBeVisible();
   await page.route('**/api/sheets/*', (route) => route.fulfill({ status: 503, json: {} }));
   await page.goto('/sheets/unreachable');
-  await expect(page.getByRole('heading', { name: 'The sheet could not be opened' })).toBeVisible();
+  // After the first and both further attempts.
+  const failed = page.getByRole('heading', { name: 'The sheet could not be opened' });
+  await expect(failed).toBeVisible({ timeout: 30_000 });
   await page.unroute('**/api/sheets/*');
   await page.getByRole('button', { name: 'Try again' }).click();
   await expect(page.getByRole('heading', { name: 'No such sheet' })).toBeVisible();
   await page.getByRole('link', { name: 'To your sheets' }).click();
   await expect(list(page)).toBeVisible();
+});
+
+test('an open sheet outlasts an answer that fails, but not a person’s place in the team', async ({ browser }) => {
+  const runa = await (await browser.newContext({ baseURL: served.url })).newPage();
+  await signIn(runa, 'runa@buoy.example', Served.demoPassword);
+  await runa.getByRole('link', { name: 'Bias reference' }).click();
+  const sheet = await SheetPage.on(runa);
+  let asked = 0;
+  await runa.route('**/api/sheets/*', (route) => {
+    asked += 1;
+    return route.fulfill({ status: 503, json: {} });
+  });
+  const ines = await enter(browser, 'ines');
+  await choose(ines, 'Bias reference', 'Rename');
+  await ines.getByLabel('New name').fill('Bias reference, 85 µA');
+  await ines.keyboard.press('Enter');
+  // The first and both further attempts.
+  await expect.poll(() => asked, { timeout: 30_000 }).toBe(3);
+  await expect(sheet.drawing).toBeVisible();
+  await runa.unroute('**/api/sheets/*');
+
+  await ines.goto('/team');
+  await ines.getByRole('button', { name: 'Remove Runa Leclerc' }).click();
+  await ines
+    .getByRole('dialog')
+    .getByRole('button', { name: /^Remove/ })
+    .click();
+  await expect(runa.getByRole('heading', { name: 'You may no longer open this sheet' })).toBeVisible();
+  await runa.getByRole('link', { name: 'To your sheets' }).click();
+  await expect(runa).toHaveURL(`${served.url}/`);
 });
 
 for (const colorScheme of ['light', 'dark'] as const) {
@@ -136,7 +171,7 @@ for (const colorScheme of ['light', 'dark'] as const) {
     await page.emulateMedia({ colorScheme });
     for (const width of [1440, 390]) {
       await page.setViewportSize({ width, height: 900 });
-      await expect(row(page, 'Bias reference')).toBeVisible();
+      await expect(row(page, 'Hydrophone input pair')).toBeVisible();
       const { violations } = await new AxeBuilder({ page }).analyze();
       expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' ')}`)).toEqual([]);
       expect(await page.evaluate(() => document.documentElement.scrollWidth)).toBeLessThanOrEqual(width);

@@ -19,12 +19,9 @@ export function selfBiasedReference({ withStart } = { withStart: true }): Drawin
   const q4 = sketch.part('pfet', 'Q4', 640, 100, { ...channel(20e-6), intent });
   const q5 = sketch.part('pfet', 'Q5', 900, 100, { ...channel(20e-6), intent });
 
-  const railStart = sketch.junction(120, 0);
   const railQ3 = sketch.junction(340, 0);
   const railQ4 = sketch.junction(640, 0);
-  sketch.supply('vdd', 120, 0);
-  sketch.wire(v1('plus'), railStart, [0, 0]);
-  sketch.wire(railStart, railQ3);
+  sketch.supply('vdd', 340, 0);
   sketch.wire(railQ3, q3('source'));
   sketch.wire(railQ3, railQ4);
   sketch.wire(railQ4, q4('source'));
@@ -53,8 +50,13 @@ export function selfBiasedReference({ withStart } = { withStart: true }): Drawin
 
   if (withStart) {
     const r3 = sketch.part('resistor', 'R3', 120, 120, { resistance: 1e6 });
-    sketch.wire(railStart, r3('a'));
+    const railR3 = sketch.junction(120, 0);
+    sketch.wire(v1('plus'), railR3, [0, 0]);
+    sketch.wire(railR3, railQ3);
+    sketch.wire(railR3, r3('a'));
     sketch.wire(r3('b'), nDrain, [120, 230]);
+  } else {
+    sketch.wire(v1('plus'), railQ3, [0, 0]);
   }
 
   const out = sketch.junction(900, 230);

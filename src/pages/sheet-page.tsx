@@ -15,7 +15,8 @@ import { SheetDesk } from './sheet-desk';
 export default function SheetPage() {
   const { id: sheetId = '' } = useParams();
   const answer = useSheet(sheetId);
-  if (answer.isSuccess) return <LiveSheet key={sheetId} answer={answer.data} refetch={() => void answer.refetch()} />;
+  // Once open, a sheet stays: an answer that fails later must not take away what was drawn, and the live line says who may no longer see it.
+  if (answer.data) return <LiveSheet key={sheetId} answer={answer.data} refetch={() => void answer.refetch()} />;
   if (answer.isError) return <NotOpened error={answer.error} retry={() => void answer.refetch()} />;
   return <Opening>Opening the sheet</Opening>;
 }
@@ -38,9 +39,9 @@ function NotOpened({ error, retry }: { error: Error; retry: () => void }) {
 const DENIAL_WORDS: Readonly<Record<Denial, string>> = {
   'not-allowed':
     'Your last change was not shared: you may only look at this sheet now. It shows what everyone else sees.',
-  'too-large': 'Your last change was too large to share. The sheet shows what everyone else sees: change less at once.',
   archived:
     'Your last change was not shared: this sheet was archived, and is to be looked at only. It shows what everyone else sees.',
+  'too-large': 'Your last change was too large to share. The sheet shows what everyone else sees: change less at once.',
 };
 
 /** The live connection to a sheet; begun anew after the server refused a change, for then the copy here is not the shared one. */

@@ -27,8 +27,8 @@ export function InvitationList({ teamId }: { readonly teamId: string }) {
           </Failure>
         </div>
       )}
-      {invitations.isSuccess && invitations.data.length === 0 && <p className="mt-2">None.</p>}
-      {invitations.isSuccess && invitations.data.length > 0 && (
+      {invitations.data?.length === 0 && <p className="mt-2">None.</p>}
+      {invitations.data && invitations.data.length > 0 && (
         <ul className="mt-2 border-b border-rule">
           {invitations.data.map((invitation) => (
             <li key={invitation.id} className="flex items-start justify-between gap-3 border-t border-rule py-2">

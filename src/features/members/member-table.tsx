@@ -23,11 +23,10 @@ export function MemberTable({ team }: { readonly team: OwnTeam }) {
   const { say, warn } = useStatus();
   const [removing, setRemoving] = useState<Member | null>(null);
   if (members.isPending) return <Waiting>Fetching the members</Waiting>;
-  if (members.isError) {
-    return (
-      <Failure onRetry={() => members.refetch()}>The members could not be fetched. {members.error.message}</Failure>
-    );
-  }
+  const failure = members.isError && (
+    <Failure onRetry={() => members.refetch()}>The members could not be fetched. {members.error.message}</Failure>
+  );
+  if (!members.data) return failure;
 
   const manages = can(team.role, 'manage-members');
   const setRole = (member: Member, role: Role) =>
@@ -40,6 +39,7 @@ export function MemberTable({ team }: { readonly team: OwnTeam }) {
     );
   return (
     <>
+      {failure}
       <Table label="Members">
         <thead>
           <tr>

@@ -19,11 +19,17 @@ interface TeamSheetsProps {
 export function TeamSheets({ team, onBegin }: TeamSheetsProps) {
   const sheets = useSheets(team.id);
   if (sheets.isPending) return <Waiting>Fetching the sheets</Waiting>;
-  if (sheets.isError) {
-    return <Failure onRetry={() => sheets.refetch()}>The sheets could not be fetched. {sheets.error.message}</Failure>;
-  }
-  if (sheets.data.length === 0) return <NoSheet mayBegin={can(team.role, 'edit-sheet')} onBegin={onBegin} />;
-  return <FoundSheets team={team} sheets={sheets.data} onBegin={onBegin} />;
+  return (
+    <>
+      {sheets.isError && (
+        <div className="mb-4">
+          <Failure onRetry={() => sheets.refetch()}>The sheets could not be fetched. {sheets.error.message}</Failure>
+        </div>
+      )}
+      {sheets.data?.length === 0 && <NoSheet mayBegin={can(team.role, 'edit-sheet')} onBegin={onBegin} />}
+      {sheets.data && sheets.data.length > 0 && <FoundSheets team={team} sheets={sheets.data} onBegin={onBegin} />}
+    </>
+  );
 }
 
 function NoSheet({ mayBegin, onBegin }: { readonly mayBegin: boolean; readonly onBegin: () => void }) {

@@ -89,8 +89,11 @@ test('a cascode whose gate lies too low leaves the FET under it without headroom
   expect(settled(cascodeAmplifier({ upperDivider: 120e3 })).verdicts).toEqual({ Q1: 'missed', Q2: 'met' });
 });
 
-test('a self-biased reference without its start-up resistor still shows the point that carries current', () => {
+test('a self-biased reference without its start-up resistor shows the point that carries current, and the other', () => {
   const { verdicts, record } = settled(selfBiasedReference({ withStart: false }));
   expect(new Set(Object.values(verdicts))).toEqual(new Set(['met']));
   expect(record.resistors.R1?.current).toBeGreaterThan(50e-6);
+  expect(record.problems.map(({ code }) => code)).toContain('several-operating-points');
+  const atRest = record.alternatives.filter(({ fets }) => Object.values(fets).every(({ id }) => Math.abs(id) < 1e-9));
+  expect(atRest).toHaveLength(1);
 });
