@@ -79,30 +79,32 @@ function overlaps(drawing: Element): string[] {
   const labels = boxes('.part-label');
   const names = boxes('.net-label');
   const figures = boxes('[data-current]');
-  const symbols = boxes('.react-flow__node .symbol :is(path, circle)');
   const dots = boxes('.dot');
-  if (tags.length * labels.length * names.length * symbols.length === 0) return ['a drawing without texts or symbols'];
+  if (tags.length * labels.length * names.length * dots.length === 0) return ['a drawing without texts or symbols'];
   const texts = [...tags, ...labels, ...names, ...figures];
   const found: string[] = [];
   texts.forEach((text, i) => {
     for (const other of texts.slice(i + 1)) if (meet(text, other)) found.push(`${text.name} over ${other.name}`);
-    for (const other of [...symbols, ...dots]) if (meet(text, other)) found.push(`${text.name} over ${other.name}`);
+    for (const other of dots) if (meet(text, other)) found.push(`${text.name} over ${other.name}`);
   });
-  for (const wire of drawing.querySelectorAll<SVGPathElement>('.react-flow__edge-path')) {
-    const matrix = wire.getScreenCTM();
-    const length = wire.getTotalLength();
-    for (let at = 0; matrix && at <= length; at += 3) {
-      const point = wire.getPointAtLength(at).matrixTransform(matrix);
-      for (const { name, box } of [...tags, ...labels, ...figures]) {
-        const inside =
-          point.x > box.left + slack &&
-          point.x < box.right - slack &&
-          point.y > box.top + slack &&
-          point.y < box.bottom - slack;
-        const said = `${name} over wire ${wire.dataset.wire}`;
+  const covered = (stroke: SVGGeometryElement, what: string, covering: Thing[]) => {
+    const matrix = stroke.getScreenCTM();
+    const length = stroke.getTotalLength();
+    for (let at = 0; matrix && at <= length; at += 2) {
+      const { x, y } = stroke.getPointAtLength(at).matrixTransform(matrix);
+      for (const { name, box } of covering) {
+        const inside = x > box.left + slack && x < box.right - slack && y > box.top + slack && y < box.bottom - slack;
+        const said = `${name} over ${what}`;
         if (inside && !found.includes(said)) found.push(said);
       }
     }
+  };
+  for (const wire of drawing.querySelectorAll<SVGPathElement>('.react-flow__edge-path')) {
+    covered(wire, `wire ${wire.dataset.wire}`, [...tags, ...labels, ...figures]);
   }
-  return found;
+  const strokes = drawing.querySelectorAll<SVGGeometryElement>('.react-flow__node .symbol :is(path, circle)');
+  for (const stroke of strokes) {
+    covered(stroke, `the symbol of ${stroke.closest<HTMLElement>('[data-ref]')?.dataset.ref}`, texts);
+  }
+  return strokes.length === 0 ? ['a drawing without symbols'] : found;
 }

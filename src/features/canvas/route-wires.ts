@@ -1,4 +1,4 @@
-import { type Drawing, type DrawnPart, isFet, type Wire, type WireId } from '#shared/circuit/drawing';
+import { type Drawing, type DrawnPart, isFet, type Wire, type WireEnd, type WireId } from '#shared/circuit/drawing';
 import { type DrawnNets, terminalKey } from '#shared/circuit/nets';
 import { around, hungBox, widened } from '#shared/geometry/box';
 import { type GridPoint, samePoint } from '#shared/geometry/place';
@@ -35,8 +35,15 @@ export function routeWires(
     return number;
   };
   const lines: { line: Line; net: number }[] = [];
+  const all = [...parts];
+  const written = new Set(all.filter((part) => standsOnWire(part, drawing, ends)).map(({ id }) => id));
+  // A name in the middle of a wire has no lead that would say which way to go on.
+  const endAt = ({ part, pin }: WireEnd) => {
+    const end = ends.get(terminalKey({ part, pin }));
+    return end && written.has(part) ? { at: end.at, leaves: { x: 0, y: 0 } } : end;
+  };
   for (const wire of drawing.wires) {
-    const [from, to] = [ends.get(terminalKey(wire.from)), ends.get(terminalKey(wire.to))];
+    const [from, to] = [endAt(wire.from), endAt(wire.to)];
     if (!from || !to) continue;
     const net = numberOf(terminalKey(wire.from));
     const bends = bendsOf(wire);
@@ -49,7 +56,7 @@ export function routeWires(
   }
   if (open.length === 0) return routes;
 
-  const marks = [...parts].filter((part) => !standsOnWire(part, drawing, ends));
+  const marks = all.filter(({ id }) => !written.has(id));
   const field = fieldOf(marks, [...ends.values(), ...lines.flatMap(({ line }) => line).map((at) => ({ at }))]);
   for (const [key, { at }] of ends) field.addTerminal(at, numberOf(key));
   for (const { line, net } of lines) field.addWire(line, net);
