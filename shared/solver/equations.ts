@@ -24,6 +24,9 @@ export interface LinearFet {
   readonly offset: number;
 }
 
+/** What Newton's method asks of a factorisation. */
+export type LinearSolver = Pick<SparseLu, 'factor' | 'solve' | 'determinantSign'>;
+
 export const TRUE_CIRCUIT: Conditions = { leakage: 0, supply: 1 };
 
 /**
@@ -41,7 +44,7 @@ export class Equations {
   readonly throughput: Float64Array;
   /** ∂residual/∂voltage, in the slots of the network's pattern; one more past the last takes what ground would. */
   readonly jacobian: Float64Array;
-  readonly lu: SparseLu;
+  readonly lu: LinearSolver;
   /** V, by net, of the last evaluation. */
   readonly netVoltages: Float64Array;
   /** V, by FET, of the last evaluation. */
@@ -56,8 +59,9 @@ export class Equations {
   readonly #leaving: Float64Array;
   readonly #passing: Float64Array;
 
-  constructor(network: Network) {
+  constructor(network: Network, lu: LinearSolver = new SparseLu(network.pattern, network.topology.analysis)) {
     this.network = network;
+    this.lu = lu;
     const size = network.groups.length;
     this.#rowOf = network.groupOf.map((group) => (group < 0 ? size : group));
     this.#leaving = new Float64Array(size + 1);
@@ -70,7 +74,6 @@ export class Equations {
     this.step = new Float64Array(size);
     this.trial = new Float64Array(size);
     this.weight = new Float64Array(size);
-    this.lu = new SparseLu(network.pattern, network.topology.analysis);
   }
 
   get size(): number {

@@ -3,6 +3,7 @@ import { type FreeRange, findFreeRange } from './free-range';
 import { newton } from './newton';
 import { hasNegativeDeterminant } from './stability';
 import {
+  EDGE,
   findUndrivenPieces,
   isDrivenThroughout,
   quietUndrivenPieces,
@@ -72,7 +73,7 @@ export function polish(equations: Equations, found: Float64Array, off?: Uint8Arr
   const surelyUnstable = hasNegativeDeterminant(equations);
   const range = findFreeRange(equations, x, held, true);
   if (range) return { kind: 'free-range', range, iterations };
-  if (!balances(equations, x)) return { kind: 'none', iterations };
+  if (!balances(equations, x) || (off && !areOff(equations, off))) return { kind: 'none', iterations };
   return { kind: 'point', x, undriven, held, surelyUnstable, iterations };
 }
 
@@ -94,6 +95,11 @@ function findUndriven(
     x.set(trial);
   }
   return { undriven: findUndrivenPieces(equations, coarser, x, off), iterations };
+}
+
+/** Whether FETs that were taken to be off are so where the equations were evaluated last. */
+function areOff({ overdrives }: Equations, off: Uint8Array): boolean {
+  return overdrives.every((vov, index) => off[index] === 0 || vov <= EDGE);
 }
 
 /** Whether all currents cancel to rounding at every net, held ones included. */

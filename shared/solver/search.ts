@@ -12,6 +12,8 @@ export const MOST_UNKNOWNS_SEARCHED = 300;
 
 const WITH_LEAKAGE = { leakage: SEARCH_LEAKAGE, supply: 1 };
 const NEWTON_ITERATIONS = 40;
+/** Fewer, as a deflated step that leads somewhere does so soon, and most lead nowhere. */
+const DEFLATED_ITERATIONS = 25;
 /** Loops of a circuit that are each looked at at rest. */
 const MOST_LOOPS = 30;
 /** Times one start is used again after it has led to a point, which is then deflated. */
@@ -76,8 +78,10 @@ class Search {
   }
 
   from(start: Float64Array): void {
-    this.#solve(start.slice());
-    for (let repeat = 0; repeat < MOST_REPEATS; repeat++) if (!this.#solve(start.slice(), this.#deflation)) break;
+    let outcome = this.#solve(start.slice());
+    for (let repeat = 0; repeat < MOST_REPEATS && outcome !== 'failed'; repeat++) {
+      outcome = this.#solve(start.slice(), this.#deflation);
+    }
   }
 
   /** Takes FETs to be off and looks whether they are: leakage to ground would start them, so `from` may never see it. */
@@ -93,14 +97,15 @@ class Search {
     this.from(one.x.map((voltage, group) => (voltage + (other.x[group] as number)) / 2));
   }
 
-  /** Whether it came to a solution that had not been met. */
-  #solve(x: Float64Array, deflation?: Deflation): boolean {
-    const { status, iterations } = newton(this.#equations, x, WITH_LEAKAGE, NEWTON_ITERATIONS, deflation);
-    if (status !== 'converged' || this.#isMet(x)) return false;
+  #solve(x: Float64Array, deflation?: Deflation): 'new' | 'met' | 'failed' {
+    const most = deflation ? DEFLATED_ITERATIONS : NEWTON_ITERATIONS;
+    const { status, iterations } = newton(this.#equations, x, WITH_LEAKAGE, most, deflation);
+    if (status !== 'converged') return 'failed';
+    if (this.#isMet(x)) return deflation ? 'failed' : 'met';
     this.#meet(x);
     const polished = polish(this.#equations, x);
     if (polished.kind === 'point') this.#keep({ ...polished, iterations: iterations + polished.iterations });
-    return true;
+    return 'new';
   }
 
   #keep(point: Point): void {

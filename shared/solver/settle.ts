@@ -53,7 +53,8 @@ export function settle(equations: Equations): Settlement {
   let failure: Failure | null = null;
   let iterations = 0;
   for (const start of startingPoints(equations)) {
-    const settled = settleFrom(equations, start);
+    // Once there is a point a further start that Newton's method alone cannot settle is not worth the fall-backs.
+    const settled = settleFrom(equations, start, points.length > 0);
     iterations += settled.iterations;
     if (settled.kind === 'point') {
       if (points.some((known) => isSamePoint(known, settled))) continue;
@@ -88,12 +89,15 @@ function graver(equations: Equations, one: Failure | null, other: Failure): Fail
 }
 
 /** Newton's method from a start; where it fails, leakage stepping, source stepping, pseudo-transient continuation. */
-export function settleFrom(equations: Equations, start: Float64Array): Settled {
-  const methods: ((x: Float64Array) => NewtonResult)[] = [
-    (x) => newton(equations, x, { leakage: SEARCH_LEAKAGE, supply: 1 }, NEWTON_ITERATIONS),
+export function settleFrom(equations: Equations, start: Float64Array, byNewtonAlone = false): Settled {
+  const fallBacks: ((x: Float64Array) => NewtonResult)[] = [
     (x) => stepLeakage(equations, x, SEARCH_LEAKAGE),
     (x) => stepSources(equations, x, SEARCH_LEAKAGE),
     (x) => settleInPseudoTime(equations, x, SEARCH_LEAKAGE),
+  ];
+  const methods: ((x: Float64Array) => NewtonResult)[] = [
+    (x) => newton(equations, x, { leakage: SEARCH_LEAKAGE, supply: 1 }, NEWTON_ITERATIONS),
+    ...(byNewtonAlone ? [] : fallBacks),
   ];
   let iterations = 0;
   let nearest = start;

@@ -22,7 +22,7 @@ export function* startingPoints(equations: Equations): Generator<Float64Array> {
 }
 
 /** Spread starts: how many have every net somewhere within the supplies, and as many more have it at one end or the other. */
-const SPREAD = 16;
+const SPREAD = 8;
 
 /**
  * Further starts for a search, a fixed number spread over the range of the supplies; the first is the circuit without its
