@@ -1,9 +1,13 @@
 import type { z } from 'zod';
+import { DEEPEST, isDeeperThan } from '#shared/api/nesting';
 import { Refusal } from '#shared/api/refusal';
 
 /** The body as its schema says, or a refusal that names each field that is wrong. */
 export function parseBody<T>(schema: z.ZodType<T>, body: unknown): T {
   if (body === undefined) throw new Refusal('malformed-request', 'Send a JSON body.');
+  if (isDeeperThan(DEEPEST, body)) {
+    throw new Refusal('malformed-request', `The body is nested too deep: at most ${DEEPEST} levels.`);
+  }
   const read = schema.safeParse(body);
   if (read.success) return read.data;
   const fields: Record<string, string> = {};

@@ -5,6 +5,7 @@ import { changesNothing } from './changes-nothing';
 import type { SheetLog } from './log';
 import type { Member } from './member';
 import { askForMissing, type ClientMessage, tellMissing, tellPresence, tellRefused, tellUpdate } from './messages';
+import { requirePlain } from './plain-update';
 import { Presences } from './presences';
 import type { CloseCode } from './socket-codes';
 
@@ -113,6 +114,7 @@ export class Room {
       member.send(tellRefused('too-large: a change may have at most 1 MB'));
       return;
     }
+    requirePlain(update);
     const waiting = this.doc.store.pendingStructs !== null;
     Y.applyUpdate(this.doc, update, member);
     // An earlier change of theirs is missing: ask for it, once.

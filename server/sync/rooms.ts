@@ -77,12 +77,12 @@ export class Rooms {
       }
     }
   }
+
   /** To be called when a sheet was archived or brought back. */
   recheckSheet(sheetId: string): void {
     const room = this.rooms.get(sheetId);
     if (room) for (const member of [...room.members]) this.recheckMember(sheetId, room, member);
   }
-
 
   recheckMember(sheetId: string, room: Room, member: Member): void {
     const admission = this.admit({ personId: member.person.id, sessionId: member.sessionId }, sheetId);

@@ -58,6 +58,14 @@ describe('a change', () => {
     expect([answer.status, codeOf(answer)]).toEqual([400, 'malformed-request']);
   });
 
+  test('nested beyond all sense is refused, whatever would read it', async () => {
+    const deep = `${'['.repeat(100_000)}${']'.repeat(100_000)}`;
+    for (const path of ['/api/operating-point', `/api/teams/${await ines.teamId()}/sheets`]) {
+      const answer = await ines.send('POST', path, `{"name": "Deep", "circuit": ${deep}}`);
+      expect([answer.status, codeOf(answer)]).toEqual([400, 'malformed-request']);
+    }
+  });
+
   test('larger than 1 MB is refused', async () => {
     const answer = await ines.post('/api/operating-point', { circuit: 'x'.repeat(1_048_577) });
     expect([answer.status, codeOf(answer)]).toEqual([413, 'too-large']);

@@ -30,6 +30,16 @@ const PRESENCE = (clientId: number, clock: number, state: unknown) =>
     );
   });
 
+/** An update that sets one key of the sheet's map. */
+const SETTING = (value: unknown) => {
+  const doc = new Y.Doc();
+  doc.getMap('sheet').set('hostile', value);
+  return UPDATE(Y.encodeStateAsUpdate(doc));
+};
+
+/** Lists in lists, so many levels of them. */
+const nested = (levels: number): unknown[] => Array.from({ length: levels }).reduce<unknown[]>((inner) => [inner], []);
+
 describe('what no client would send', () => {
   test.each<[string, Uint8Array | string, number]>([
     ['text', 'hello', 1003],
@@ -39,6 +49,9 @@ describe('what no client would send', () => {
     ['a frame that ends too early', new Uint8Array([0, 2, 200, 1]), 1007],
     ['an update of noise', UPDATE(new Uint8Array([255, 254, 253, 252, 251, 7, 7, 7])), 1007],
     ['presence that is no JSON object', PRESENCE(5, 1, ['x']), 1007],
+    ['a value nested too deep', SETTING(nested(1000)), 1007],
+    ['a type within the sheet’s maps', SETTING(new Y.Map()), 1007],
+    ['a document within the sheet’s maps', SETTING(new Y.Doc()), 1007],
     ['presence beyond every clock', PRESENCE(5, Number.MAX_SAFE_INTEGER, {}), 1007],
     ['a frame beyond 2 MiB', new Uint8Array(2 * 1_048_576 + 1), 1009],
   ])('%s ends that socket and disturbs nobody else', async (_what, frame, code) => {
