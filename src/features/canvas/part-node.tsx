@@ -28,7 +28,7 @@ export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps
   useEffect(() => updateNodeInternals(id), [id, terminals, updateNodeInternals]);
 
   return (
-    <div className="part" style={{ width: box.right - box.left, height: box.bottom - box.top }}>
+    <div className="part" data-kind={part.kind} style={{ width: box.right - box.left, height: box.bottom - box.top }}>
       {/* biome-ignore lint/a11y/useSemanticElements: React Flow drags by the element under the pointer, and a button takes no drag */}
       <div
         className={written ? 'part-face part-written' : 'part-face'}
