@@ -8,41 +8,48 @@ export class BoxIndex<B extends Box = Box> {
   readonly #buckets = new Map<number, B[]>();
 
   add(box: B): void {
-    for (const key of keysOf(box)) {
+    eachBucket(box, (key) => {
       const bucket = this.#buckets.get(key);
       if (bucket) bucket.push(box);
       else this.#buckets.set(key, [box]);
-    }
+      return true;
+    });
   }
 
   remove(box: B): void {
-    for (const key of keysOf(box)) {
+    eachBucket(box, (key) => {
       const bucket = this.#buckets.get(key);
       const at = bucket?.indexOf(box) ?? -1;
       if (at >= 0) bucket?.splice(at, 1);
-    }
+      return true;
+    });
   }
 
   /** Every box that shares more than an edge with this one, each once. */
   meeting(box: Box): B[] {
     const found: B[] = [];
-    for (const key of keysOf(box)) {
+    eachBucket(box, (key) => {
       for (const other of this.#buckets.get(key) ?? []) {
         if (overlap(box, other) && !found.includes(other)) found.push(other);
       }
-    }
+      return true;
+    });
     return found;
   }
 
   isFree(box: Box): boolean {
-    return keysOf(box).every((key) => !this.#buckets.get(key)?.some((other) => overlap(box, other)));
+    return eachBucket(box, (key) => !this.#buckets.get(key)?.some((other) => overlap(box, other)));
   }
 }
 
-function keysOf({ left, top, right, bottom }: Box): number[] {
-  const keys: number[] = [];
-  for (let x = Math.floor(left / BUCKET); x <= Math.floor(right / BUCKET); x++) {
-    for (let y = Math.floor(top / BUCKET); y <= Math.floor(bottom / BUCKET); y++) keys.push(x * 65536 + y);
+/** Visits the buckets that a box reaches into for as long as `visit` says so; whether it said so of all. */
+function eachBucket({ left, top, right, bottom }: Box, visit: (key: number) => boolean): boolean {
+  const lastColumn = Math.floor(right / BUCKET);
+  const lastRow = Math.floor(bottom / BUCKET);
+  for (let column = Math.floor(left / BUCKET); column <= lastColumn; column++) {
+    for (let row = Math.floor(top / BUCKET); row <= lastRow; row++) {
+      if (!visit(column * 65536 + row)) return false;
+    }
   }
-  return keys;
+  return true;
 }

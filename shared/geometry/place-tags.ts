@@ -1,6 +1,6 @@
 import { type Anchor, type Box, hungBox, sharedArea, widened } from './box';
 import type { BoxIndex } from './box-index';
-import type { GridPoint } from './place';
+import { type GridPoint, samePoint } from './place';
 
 /** A place where a block of text may hang; the dearer, the less it is wanted. */
 export type Candidate = Anchor & { readonly cost: number };
@@ -11,6 +11,8 @@ export type Block = {
   readonly width: number;
   readonly height: number;
   readonly candidates: readonly Candidate[];
+  /** Places to fall back on, each at least `from` in cost; made only where the others will not do. */
+  readonly remote: { readonly from: number; places(): readonly Candidate[] };
 };
 
 /** Free space wanted about a block, in px. */
@@ -35,7 +37,7 @@ export function placeTags(blocks: readonly Block[], taken: BoxIndex): Map<string
       if (before) taken.remove(before.box);
       const next = best(block, taken);
       if (!next) continue;
-      if (next.candidate !== before?.candidate) moved = true;
+      if (!before || !samePlace(next.candidate, before.candidate)) moved = true;
       chosen.set(block.id, next);
       taken.add(next.box);
     }
@@ -44,9 +46,21 @@ export function placeTags(blocks: readonly Block[], taken: BoxIndex): Map<string
   return new Map([...chosen].map(([id, { candidate }]) => [id, { at: candidate.at, grows: candidate.grows }]));
 }
 
-function best({ width, height, candidates }: Block, taken: BoxIndex): { candidate: Candidate; box: Box } | undefined {
-  let found: { candidate: Candidate; box: Box } | undefined;
-  let least = Number.POSITIVE_INFINITY;
+type Choice = { readonly candidate: Candidate; readonly box: Box; readonly cost: number };
+
+function best(block: Block, taken: BoxIndex): Choice | undefined {
+  const near = cheapest(block, block.candidates, taken, undefined);
+  return near && near.cost <= block.remote.from ? near : cheapest(block, block.remote.places(), taken, near);
+}
+
+function cheapest(
+  { width, height }: Block,
+  candidates: readonly Candidate[],
+  taken: BoxIndex,
+  rival: Choice | undefined,
+): Choice | undefined {
+  let found = rival;
+  let least = rival?.cost ?? Number.POSITIVE_INFINITY;
   for (const candidate of candidates) {
     if (candidate.cost >= least) continue;
     const box = hungBox(candidate, width, height);
@@ -58,9 +72,13 @@ function best({ width, height, candidates }: Block, taken: BoxIndex): { candidat
     }
     if (cost >= least) continue;
     least = cost;
-    found = { candidate, box };
+    found = { candidate, box, cost };
   }
   return found;
+}
+
+function samePlace(a: Candidate, b: Candidate): boolean {
+  return samePoint(a.at, b.at) && samePoint(a.grows, b.grows);
 }
 
 const GAPS = [10, 20, 40, 70, 110] as const;

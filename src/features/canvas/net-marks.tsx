@@ -26,22 +26,38 @@ export const NetMarks = memo(function NetMarks({ dots, spots, lit, voltages, Net
           <circle key={`${x} ${y}`} className="net-lit" cx={x + 0.5} cy={y + 0.5} r={4} />
         ))}
         {dots.map(({ x, y }) => (
-          <circle key={`${x} ${y}`} className="dot" cx={x + 0.5} cy={y + 0.5} r={3} />
+          <Dot key={`${x} ${y}`} x={x} y={y} />
         ))}
       </svg>
-      {spots.map(({ net, named, at }) =>
-        named || voltages ? (
-          <div
-            key={net}
-            className="net-label"
-            data-lit={lit?.net === net || undefined}
-            style={{ left: at.x, top: at.y }}
-          >
-            {named && <span className="net-name">{net}</span>}
-            {voltages && <NetVoltage net={net} />}
-          </div>
+      {spots.map((spot) =>
+        spot.named || voltages ? (
+          <NetLabel
+            key={spot.net}
+            spot={spot}
+            lit={lit?.net === spot.net}
+            NetVoltage={voltages ? NetVoltage : undefined}
+          />
         ) : null,
       )}
     </EdgeLabelRenderer>
+  );
+});
+
+const Dot = memo(function Dot({ x, y }: GridPoint) {
+  return <circle className="dot" cx={x + 0.5} cy={y + 0.5} r={3} />;
+});
+
+type NetLabelProps = {
+  readonly spot: NetSpot;
+  readonly lit: boolean;
+  readonly NetVoltage: ComponentType<{ net: string }> | undefined;
+};
+
+const NetLabel = memo(function NetLabel({ spot: { net, named, at }, lit, NetVoltage }: NetLabelProps) {
+  return (
+    <div className="net-label" data-lit={lit || undefined} style={{ left: at.x, top: at.y }}>
+      {named && <span className="net-name">{net}</span>}
+      {NetVoltage && <NetVoltage net={net} />}
+    </div>
   );
 });

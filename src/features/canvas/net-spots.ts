@@ -1,5 +1,5 @@
 import type { DrawnNets } from '#shared/circuit/nets';
-import { type Box, overlap, widened } from '#shared/geometry/box';
+import { type Box, widened } from '#shared/geometry/box';
 import type { BoxIndex } from '#shared/geometry/box-index';
 import { GRID, type GridPoint } from '#shared/geometry/place';
 import { CHARACTER } from './text-blocks';
@@ -17,6 +17,8 @@ const HALF_LINE = 8;
 const VOLTAGE_CHARACTERS = 8;
 /** Wire that must be seen on either side of the gap, in px: a dot and a little more. */
 const STUB = 8;
+/** What it costs to stand where a tag would like to. */
+const WISHED = 90;
 /** Beyond this length a wire is no better a place. */
 const LONG = 240;
 
@@ -31,7 +33,7 @@ export function netSpots(
   ground: string,
   wires: BoxIndex<NetBox>,
   taken: BoxIndex,
-  wishes: readonly Box[],
+  wishes: BoxIndex,
 ): NetSpot[] {
   const spots: NetSpot[] = [];
   for (const [net, runs] of [...graph.runsOf].sort(([a], [b]) => (a < b ? -1 : 1))) {
@@ -44,7 +46,7 @@ export function netSpots(
       for (const [at, cost] of places(run, width)) {
         if (cost >= least) continue;
         const box = boxAbout(at, width);
-        const wished = cost + 90 * wishes.filter((wish) => overlap(wish, box)).length;
+        const wished = cost + (wishes.isFree(box) ? 0 : WISHED);
         if (wished >= least || !taken.isFree(widened(box, 2)) || !clearOfWires(box, net, run, wires)) continue;
         best = at;
         least = wished;

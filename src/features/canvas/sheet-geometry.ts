@@ -83,7 +83,7 @@ export function layOut(
 }
 
 /** Whether two drawings are alike in all that decides where wires run: a value that changed is not of it. */
-function sameLayout(a: Drawing, b: Drawing): boolean {
+export function sameLayout(a: Drawing, b: Drawing): boolean {
   if (a.parts === b.parts && a.wires === b.wires) return true;
   return (
     a.wires.length === b.wires.length &&

@@ -53,7 +53,8 @@ export function placeTexts(drawing: Drawing, geometry: SheetGeometry, graph: Wir
   label(parts.filter(({ id }) => !graph.namesOnWires.has(id)));
 
   const fets = fetsOf(parts);
-  const wishes = fets.map((fet) => hungBox(tagWish(fet), TAG_WIDTH, TAG_HEIGHT));
+  const wishes = new BoxIndex();
+  for (const fet of fets) wishes.add(hungBox(tagWish(fet), TAG_WIDTH, TAG_HEIGHT));
   const spots = netSpots(graph, nets, drawing.settings.ground, wireIndex, taken, wishes);
   for (const spot of spots) free.add(spotBox(spot));
 

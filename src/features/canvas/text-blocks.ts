@@ -42,10 +42,11 @@ export function labelBlock(part: DrawnPart): Block | undefined {
     id: part.id,
     width,
     height: lines.length * LINE,
-    candidates: [
-      ...laidOut(own, part.place),
-      ...placesAbout(around(cornersOf(inkOf(part))), [RIGHT, LEFT, BELOW, ABOVE], 60),
-    ],
+    candidates: laidOut(own, part.place),
+    remote: {
+      from: 60,
+      places: () => placesAbout(around(cornersOf(inkOf(part))), [RIGHT, LEFT, BELOW, ABOVE], 60),
+    },
   };
 }
 
@@ -65,10 +66,11 @@ export function tagBlock(part: DrawnFet): Block {
     id: part.id,
     width: TAG_WIDTH,
     height: TAG_HEIGHT,
-    candidates: [
-      ...laidOut(tagPlaces(part), part.place),
-      ...placesAbout(around(cornersOf(inkOf(part))), [...distinct, ...missing], 40),
-    ],
+    candidates: laidOut(tagPlaces(part), part.place),
+    remote: {
+      from: 40,
+      places: () => placesAbout(around(cornersOf(inkOf(part))), [...distinct, ...missing], 40),
+    },
   };
 }
 
