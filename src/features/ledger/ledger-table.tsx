@@ -77,7 +77,8 @@ export const LedgerTable = memo(function LedgerTable<Row>({
     const reachedPart = reached && partOf(reached);
     if (!event.shiftKey || part === undefined || reachedPart === undefined) return;
     const parts = sorted.flatMap((row) => partOf(row) ?? []);
-    const from = anchor !== undefined && selected.has(anchor) ? anchor : part;
+    // A run goes on while the row it has come to is part of it; on any other row another begins.
+    const from = anchor !== undefined && selected.has(part) ? anchor : part;
     setAnchor(from);
     onSelectParts(chosen(selected, reachedPart, 'through', parts, from));
   };
