@@ -21,7 +21,7 @@ export function ActionsMenu({ at, desk, onClose }: ActionsMenuProps) {
           {group.map(({ label, keys, act }) => (
             <MenuItem key={label} onSelect={() => act(desk)}>
               <span>{label}</span>
-              <kbd className="ml-auto pl-6 opacity-70">{keys}</kbd>
+              <kbd className="ml-auto pl-6 opacity-70 pointer-coarse:hidden">{keys}</kbd>
             </MenuItem>
           ))}
         </Fragment>

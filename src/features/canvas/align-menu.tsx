@@ -2,11 +2,12 @@ import { useState } from 'react';
 import { bodyLedOut, type DrawnPart } from '#shared/circuit/drawing';
 import { ALIGNMENTS, type Alignment, aligned, type Direction, type Standing, spaced } from '#shared/geometry/arrange';
 import { pinPlaces } from '#shared/geometry/pins';
-import { MenuChoice, MenuItem, MenuLine } from '../../ui/menu';
+import { MenuChoice, MenuItem, MenuLine, MenuNote } from '../../ui/menu';
 import { MenuAt } from '../../ui/menu-at';
 import { type Desk, selectedParts } from './desk';
 
-const ORIGIN = 'middle of the part';
+/** Stands for the part's own point, at which it is placed. */
+const ORIGIN = 'symbol';
 
 type AlignMenuProps = {
   readonly at: { readonly x: number; readonly y: number } | undefined;
@@ -23,7 +24,7 @@ export function AlignMenu({ at, desk, onClose }: AlignMenuProps) {
   const standings = parts.map((part) => standingBy(part, chosen));
   const align = (to: Alignment) => {
     desk.commands.placeParts(aligned(standings, to));
-    desk.say(`Aligned ${parts.length} parts ${to} by ${chosen === ORIGIN ? 'their middles' : `their ${chosen}s`}.`);
+    desk.say(`Aligned ${parts.length} parts ${to}${chosen === ORIGIN ? '' : ` by their ${chosen}s`}.`);
   };
   const space = (direction: Direction) => {
     desk.commands.placeParts(spaced(standings, direction));
@@ -31,6 +32,9 @@ export function AlignMenu({ at, desk, onClose }: AlignMenuProps) {
   };
   return (
     <MenuAt at={at} label="Align and space" onClose={onClose} onFocusBack={desk.focusDrawing}>
+      <MenuNote>
+        <span className="text-faint">align</span>
+      </MenuNote>
       {ALIGNMENTS.map((to) => (
         <MenuItem key={to} onSelect={() => align(to)}>
           {to}

@@ -4,7 +4,7 @@ import type { DrawnNets } from '#shared/circuit/nets';
 import { byReference } from '#shared/circuit/reference-order';
 import { Dialog } from '../../ui/dialog';
 import type { Found } from './found-things';
-import { nameOf, spokenPart } from './part-text';
+import { describedPart, nameOf } from './part-text';
 
 type FindDialogProps = {
   readonly open: boolean;
@@ -76,12 +76,12 @@ function Finder({ parts, nets, onFound }: Pick<FindDialogProps, 'parts' | 'nets'
             role="option"
             tabIndex={-1}
             aria-selected={entry === now}
-            className="flex min-h-8 items-center gap-4 px-2.5 aria-selected:bg-ink aria-selected:text-sheet"
+            className="grid min-h-8 grid-cols-[7rem_minmax(0,1fr)] items-center gap-4 px-2.5 aria-selected:bg-ink aria-selected:text-sheet"
             onPointerMove={() => setChosen(index)}
             onClick={() => onFound(entry.found)}
           >
-            <span className="font-bold">{entry.name}</span>
-            <span className="ml-auto truncate opacity-70">{entry.what}</span>
+            <span className="truncate font-bold">{entry.name}</span>
+            <span className="truncate opacity-70">{entry.what}</span>
           </div>
         ))}
         {found.length === 0 && (
@@ -101,7 +101,7 @@ function search(text: string, parts: readonly DrawnPart[], { nets }: DrawnNets):
   const entries: Entry[] = [
     ...[...components, ...notes].map((part): Entry => {
       const name = nameOf(part) ?? 'note';
-      return { key: part.id, name, what: spokenPart(part), found: { kind: 'part', part } };
+      return { key: part.id, name, what: describedPart(part), found: { kind: 'part', part } };
     }),
     ...[...nets.values()].map(({ name, terminals }): Entry => {
       const what = `net, ${terminals.length} ${terminals.length === 1 ? 'terminal' : 'terminals'}`;

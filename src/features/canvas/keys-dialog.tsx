@@ -10,15 +10,21 @@ const BY_KEYS: readonly KeyRow[] = [
   ['Ctrl arrows', 'next part, the selection stays'],
   ['Space', 'take the part into the selection, or out of it'],
   ['Shift arrows', 'move the selected parts'],
-  ['Enter', 'open the slip; place; begin a wire at a terminal, tie it'],
+  ['Enter', 'place; begin a wire at a terminal, tie it'],
   ['. ,', 'next and previous terminal'],
-  ['Backspace', 'remove too; at a terminal, its wires'],
+  ['Delete', 'at a terminal: its wires'],
   ['Ctrl Z', 'undo what you did last'],
   ['Ctrl Y', 'redo it'],
   ['Escape', 'let go: of the move, the frame, the wire, the part, the slip'],
   ['a', 'all actions; a click with the other button does too'],
   ['?', 'these keys'],
 ];
+
+/** A key that does one thing or its opposite is listed once. */
+const ACTION_KEYS: readonly KeyRow[] = [...new Set(ACTIONS.flat().map(({ keys }) => keys))].map((wanted) => {
+  const labels = ACTIONS.flat().flatMap(({ keys, label }) => (keys === wanted ? [lowered(label)] : []));
+  return [wanted, labels.join('; ')];
+});
 
 const BY_POINTER: readonly KeyRow[] = [
   ['click', 'select; a second click opens the slip'],
@@ -35,10 +41,10 @@ export function KeysDialog({ open, onClose }: { open: boolean; onClose(): void }
       open={open}
       onOpenChange={(next) => !next && onClose()}
       title="Keys"
-      description="They act while the drawing has the focus."
+      description="They act while the drawing has the focus. On a Mac, Cmd stands for Ctrl."
     >
       <Rows title="to move about and to draw" rows={BY_KEYS} />
-      <Rows title="what is selected" rows={ACTIONS.flat().map(({ keys, label }) => [keys, lowered(label)])} />
+      <Rows title="to act on what is selected" rows={ACTION_KEYS} />
       <Rows
         title="to place"
         rows={CATALOGUE.flatMap(({ letter, label }) => (letter === undefined ? [] : [[letter, label]]))}

@@ -52,8 +52,17 @@ function micrometres(metres: number): string {
 
 /** A part as it is spoken of: `Resistor R3, 10 kΩ`. */
 export function spokenPart(part: DrawnPart): string {
+  return described(part, nameOf(part));
+}
+
+/** A part beside its name: `Resistor, 10 kΩ`. */
+export function describedPart(part: DrawnPart): string {
+  return described(part, undefined);
+}
+
+function described(part: DrawnPart, name: string | undefined): string {
   const { label } = catalogueEntry(part.kind);
-  const title = [label.charAt(0).toUpperCase() + label.slice(1), nameOf(part)].filter(Boolean).join(' ');
+  const title = [label.charAt(0).toUpperCase() + label.slice(1), name].filter(Boolean).join(' ');
   if (part.kind === 'note') return [title, noteLines(part.values.text)[0]].filter(Boolean).join(': ');
   const value = plainValue(part);
   if (value === undefined) return title;
