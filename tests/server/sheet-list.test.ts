@@ -1,31 +1,20 @@
 import { expect, test, vi } from 'vitest';
 import { operatingPointRecordSchema } from '#shared/analyses/operating-point-record';
 import { standingOf } from '#shared/analyses/verdict';
-import { type ListedSheet, sheetsAnswer } from '#shared/api/sheets';
+import type { ListedSheet } from '#shared/api/sheets';
 import { circuitFileSchema } from '#shared/circuit/circuit-file';
 import { remove, setTemperature } from '#shared/doc/commands';
 import { readDrawing } from '#shared/doc/read-drawing';
 import { LiveSheet } from './support/live-sheet';
+import { solvedList } from './support/solved-list';
 import { newDatabaseFile, startTestServer } from './support/start-test-server';
 import { assembleTeam, Visitor } from './support/visitor';
 
 const server = await startTestServer();
 const { teamId, owner, designer, viewer } = await assembleTeam(server);
 
-/** The team's list, once every sheet in it is solved. */
-async function listOf(visitor: Visitor, team: string): Promise<ListedSheet[]> {
-  return vi.waitFor(
-    async () => {
-      const { sheets } = sheetsAnswer.parse((await visitor.get(`/api/teams/${team}/sheets`)).body);
-      expect(sheets.map(({ standing }) => standing)).not.toContain(null);
-      return sheets;
-    },
-    { timeout: 10_000 },
-  );
-}
-
 async function listed(visitor: Visitor, sheetId: string): Promise<ListedSheet> {
-  const found = (await listOf(visitor, teamId)).find(({ id }) => id === sheetId);
+  const found = (await solvedList(visitor, teamId)).find(({ id }) => id === sheetId);
   if (!found) throw new Error(`the list lacks ${sheetId}`);
   return found;
 }
@@ -103,9 +92,9 @@ test('a restart changes nothing that the list says', async () => {
   for (const starter of ['mirror', 'cascode-amplifier', 'output-driver']) {
     await team.owner.createSheet(team.teamId, { starter });
   }
-  const before = await listOf(team.owner, team.teamId);
+  const before = await solvedList(team.owner, team.teamId);
   await first.stop();
   const again = new Visitor(await startTestServer({ file }));
   await again.signIn('Ines Rautio');
-  expect(await listOf(again, team.teamId)).toEqual(before);
+  expect(await solvedList(again, team.teamId)).toEqual(before);
 });

@@ -1,9 +1,9 @@
 import { readFileSync, statSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
 import { meAnswer } from '#shared/api/accounts';
-import { sheetsAnswer } from '#shared/api/sheets';
 import { type Config, readConfig } from '../../../server/config';
 import { type Running, startServer } from '../../../server/start';
+import { solvedList } from '../support/solved-list';
 import { startTestServer, temporaryFile } from '../support/start-test-server';
 import { Visitor } from '../support/visitor';
 
@@ -30,8 +30,7 @@ describe('the demo', () => {
     expect(roles.sort()).toEqual(['designer', 'owner', 'reviewer', 'viewer']);
 
     const { visitor } = await signInAs(server, 'ines@buoy.example', password);
-    const teamId = await visitor.teamId();
-    const { sheets } = sheetsAnswer.parse((await visitor.get(`/api/teams/${teamId}/sheets`)).body);
+    const sheets = await solvedList(visitor, await visitor.teamId());
     const worst = sheets.map(({ name, standing }) => [
       name,
       standing?.status === 'solved' && `${standing.worst?.ref} ${standing.worst?.verdict} of ${standing.fets}`,
