@@ -17,7 +17,7 @@ export default defineConfig(({ isSsrBuild }) => ({
   test: {
     include: ['tests/**/*.test.{ts,tsx}'],
     environment: 'node',
-    // A busy machine takes its time to start a thread.
-    testTimeout: 15_000,
+    // A busy machine takes its time to start a thread and solve its first circuits.
+    testTimeout: 30_000,
   },
 }));

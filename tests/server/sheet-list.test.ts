@@ -59,7 +59,7 @@ test('a sheet that cannot be solved says why, and an empty one that nothing is d
     async () => {
       expect((await listed(viewer, id)).standing).toMatchObject({ status: 'invalid', fets: 1, reason: /float/ });
     },
-    { timeout: 10_000 },
+    { timeout: 20_000 },
   );
 });
 

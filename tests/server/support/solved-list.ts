@@ -10,6 +10,6 @@ export async function solvedList(visitor: Visitor, teamId: string): Promise<List
       expect(sheets.map(({ standing }) => standing)).not.toContain(null);
       return sheets;
     },
-    { timeout: 10_000 },
+    { timeout: 20_000 },
   );
 }
