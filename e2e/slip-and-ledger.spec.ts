@@ -105,7 +105,7 @@ test('the slip draws the device’s own curve with the load it sees, gives its n
 });
 
 test('from the ledger a part is found, opened, and edited together with others, by keys alone', async ({ browser }) => {
-  test.setTimeout(120_000);
+  test.setTimeout(180_000);
   const page = await openWindow(browser, served.url);
   await openPair(page, 'ines@buoy.example');
   const fets = page.getByRole('table', { name: 'FETs' });
