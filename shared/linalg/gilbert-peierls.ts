@@ -149,10 +149,14 @@ class ColumnSearch {
 
   finish(originals: Int32Array): Elimination {
     const { stepOfRow } = this;
+    const lowerSteps = Int32Array.from(this.lowerRows);
+    for (let entry = 0; entry < lowerSteps.length; entry++) {
+      lowerSteps[entry] = stepOfRow[lowerSteps[entry] as number] as number;
+    }
     return {
       pivotRows: this.#rowOfStep.map((row) => originals[row] as number),
       stepOfRow,
-      lower: { starts: this.lowerStarts, rows: Int32Array.from(this.lowerRows, (row) => stepOfRow[row] as number) },
+      lower: { starts: this.lowerStarts, rows: lowerSteps },
       upper: { starts: this.#upperStarts, rows: Int32Array.from(this.#upperSteps) },
       isOdd: isOddPermutation(stepOfRow),
     };

@@ -24,7 +24,8 @@ export class PatternBuilder {
   /** Sorts by row, then stably by column, and drops what was added twice: linear in the number of places. */
   build(): SparsePattern {
     const size = this.#size;
-    const places = Int32Array.from(this.#rows.keys());
+    const places = new Int32Array(this.#rows.length);
+    for (let place = 0; place < places.length; place++) places[place] = place;
     const byRow = countingSort(places, this.#rows, size);
     const byColumn = countingSort(byRow, this.#columns, size);
     const starts = new Int32Array(size + 1);

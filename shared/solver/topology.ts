@@ -199,14 +199,28 @@ function layOut(
     rows.push(isThere ? i : -1);
     columns.push(j);
   };
+  const reserveRow = (row: number, drain: number, gate: number, source: number, body: number): void => {
+    reserve(row, drain);
+    reserve(row, gate);
+    reserve(row, source);
+    reserve(row, body);
+  };
   for (const { drain, gate, source, body } of fets) {
-    for (const row of [drain, source]) for (const column of [drain, gate, source, body]) reserve(row, column);
+    reserveRow(drain, drain, gate, source, body);
+    reserveRow(source, drain, gate, source, body);
   }
-  for (const { a, b } of resistors) for (const row of [a, b]) for (const column of [a, b]) reserve(row, column);
+  for (const { a, b } of resistors) {
+    reserve(a, a);
+    reserve(a, b);
+    reserve(b, a);
+    reserve(b, b);
+  }
   const pattern = builder.build();
-  const slots = Int32Array.from(rows, (row, at) =>
-    row < 0 ? pattern.rows.length : slotOf(pattern, row, columns[at] as number),
-  );
+  const slots = new Int32Array(rows.length);
+  for (let at = 0; at < slots.length; at++) {
+    const row = rows[at] as number;
+    slots[at] = row < 0 ? pattern.rows.length : slotOf(pattern, row, columns[at] as number);
+  }
   return {
     analysis: analyse(pattern),
     diagonal: Int32Array.from({ length: size }, (_, group) => slotOf(pattern, group, group)),

@@ -1,8 +1,10 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { approximateMinimumDegree } from '#shared/linalg/approximate-minimum-degree';
+import { analyse } from '#shared/linalg/lu-analysis';
 import { SparseLu } from '#shared/linalg/sparse-lu';
 import { PatternBuilder, slotOf } from '#shared/linalg/sparse-matrix';
+import { strongComponents } from '#shared/linalg/strong-components';
 
 type Entry = readonly [row: number, column: number, value: number];
 
@@ -125,5 +127,112 @@ describe('sparse LU', () => {
     const builder = new PatternBuilder(5);
     for (const tip of [1, 2, 3, 4]) builder.add(0, tip);
     expect([...approximateMinimumDegree(builder.build())].indexOf(0)).toBeGreaterThanOrEqual(3);
+  });
+
+  test('keeps its pattern while pivots are good, exchanges rows when one turns poor, and is right both times', () => {
+    const { pattern } = matrixOf(2, [
+      [0, 0, 1],
+      [0, 1, 1],
+      [1, 0, 1],
+      [1, 1, 1],
+    ]);
+    const lu = new SparseLu(pattern);
+    for (const first of [2, 1e-9, 0, 3]) {
+      // By columns: (first, 1), (1, 1); the exact solution of (first + 2, 3) is (1, 2).
+      expect(lu.factor(Float64Array.of(first, 1, 1, 1))).toBe(true);
+      const x = Float64Array.of(first + 2, 3);
+      lu.solve(x);
+      expect(x[0]).toBeCloseTo(1, 12);
+      expect(x[1]).toBeCloseTo(2, 12);
+      expect(lu.determinantSign(0)).toBe(Math.sign(first - 1));
+    }
+  });
+
+  test('gives bit by bit what a new object gives when the analysis is shared', () => {
+    const list: Entry[] = Array.from({ length: 60 }, (_, at) => [(at * 7) % 20, (at * 11 + 3) % 20, 1 + (at % 5)]);
+    const diagonal = Array.from({ length: 20 }, (_, index): Entry => [index, index, 30]);
+    const { pattern, values } = matrixOf(20, [...list, ...diagonal]);
+    const analysis = analyse(pattern);
+    const [used, fresh] = [new SparseLu(pattern, analysis), new SparseLu(pattern, analysis)];
+    used.factor(values.map((value, slot) => value * (1 + slot)));
+    const [one, other] = [used, fresh].map((lu) => {
+      lu.factor(values);
+      const x = new Float64Array(20).fill(1);
+      lu.solve(x);
+      return x;
+    });
+    expect(one).toEqual(other);
+  });
+});
+
+/** Entries below the diagonal that eliminating A + Aᵀ in an order makes, by playing it through. */
+function fill(size: number, edges: readonly (readonly [number, number])[], order: Int32Array): number {
+  const around = Array.from({ length: size }, () => new Set<number>());
+  for (const [a, b] of edges) {
+    around[a]?.add(b);
+    around[b]?.add(a);
+  }
+  let count = 0;
+  for (const node of order) {
+    const clique = [...(around[node] ?? [])];
+    count += clique.length;
+    for (const one of clique) {
+      around[one]?.delete(node);
+      for (const other of clique) if (other !== one) around[one]?.add(other);
+    }
+  }
+  return count;
+}
+
+describe('orderings', () => {
+  const mesh = (side: number) =>
+    Array.from({ length: side * side }, (_, node) => node).flatMap((node): [number, number][] => [
+      ...(node % side < side - 1 ? [[node, node + 1] as [number, number]] : []),
+      ...(node + side < side * side ? [[node, node + side] as [number, number]] : []),
+    ]);
+
+  test('approximate minimum degree is a permutation that fills a mesh in far less than its natural order', () => {
+    const side = 24;
+    const edges = mesh(side);
+    const builder = new PatternBuilder(side * side);
+    for (const [a, b] of edges) builder.add(a, b);
+    const order = approximateMinimumDegree(builder.build());
+    expect([...order].sort((a, b) => a - b)).toEqual(Array.from({ length: side * side }, (_, index) => index));
+    const natural = Int32Array.from({ length: side * side }, (_, index) => index);
+    // In natural order a mesh fills its band: side³ entries or so.
+    expect(fill(side * side, edges, natural)).toBeGreaterThan(0.9 * side ** 3);
+    expect(fill(side * side, edges, order)).toBeLessThan(0.5 * side ** 3);
+  });
+
+  test('strong components come out so that no entry lies below the blocks', () => {
+    fc.assert(
+      fc.property(
+        fc.integer({ min: 1, max: 30 }).chain((size) => fc.tuple(fc.constant(size), entries(size))),
+        ([size, list]) => {
+          const { pattern } = matrixOf(size, list);
+          const { order, starts } = strongComponents(pattern);
+          const blockOf = new Map<number, number>();
+          for (let block = 0; block + 1 < starts.length; block++) {
+            for (const index of order.subarray(starts[block], starts[block + 1])) blockOf.set(index, block);
+          }
+          expect(blockOf.size).toBe(size);
+          for (const [row, column] of list) expect(blockOf.get(row)).toBeLessThanOrEqual(blockOf.get(column) ?? -1);
+        },
+      ),
+      { seed: 3 },
+    );
+  });
+
+  test('a chain splits into blocks of one, a ring stays whole', () => {
+    const chain = new PatternBuilder(4);
+    for (const [row, column] of [
+      [1, 0],
+      [2, 1],
+      [3, 2],
+    ] as const)
+      chain.add(row, column);
+    expect([...strongComponents(chain.build()).order]).toEqual([3, 2, 1, 0]);
+    chain.add(0, 3);
+    expect([...strongComponents(chain.build()).starts]).toEqual([0, 4]);
   });
 });
