@@ -76,7 +76,7 @@ function Finder({ parts, nets, onFound }: Pick<FindDialogProps, 'parts' | 'nets'
             role="option"
             tabIndex={-1}
             aria-selected={entry === now}
-            className="grid min-h-8 grid-cols-[7rem_minmax(0,1fr)] items-center gap-4 px-2.5 aria-selected:bg-ink aria-selected:text-sheet"
+            className="grid min-h-8 grid-cols-[4.5rem_minmax(0,1fr)] items-center gap-3 sm:grid-cols-[8rem_minmax(0,1fr)] px-2.5 aria-selected:bg-ink aria-selected:text-sheet"
             onPointerMove={() => setChosen(index)}
             onClick={() => onFound(entry.found)}
           >

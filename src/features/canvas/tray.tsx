@@ -66,6 +66,14 @@ export function Tray(props: TrayProps) {
         <button type="button" className="tray-button" aria-label="Find" title="Find (f)" onClick={props.onFind}>
           <Search size={15} strokeWidth={1.5} aria-hidden />
         </button>
+        <button type="button" className="tray-button" onClick={props.onFit} title="Show the whole drawing">
+          <Maximize size={14} strokeWidth={1.5} aria-hidden />
+          <Zoom />
+          <span className="sr-only">, show the whole drawing</span>
+        </button>
+        <button type="button" className="tray-button" onClick={props.onKeys} aria-label="Keys" title="Keys (?)">
+          <CircleQuestionMark size={16} strokeWidth={1.5} aria-hidden />
+        </button>
         <label className="tray-toggle">
           <input type="checkbox" checked={voltages} onChange={(event) => props.onVoltages(event.target.checked)} />
           voltages
@@ -78,14 +86,6 @@ export function Tray(props: TrayProps) {
           />
           currents
         </label>
-        <button type="button" className="tray-button" onClick={props.onFit} title="Show the whole drawing">
-          <Maximize size={14} strokeWidth={1.5} aria-hidden />
-          <Zoom />
-          <span className="sr-only">, show the whole drawing</span>
-        </button>
-        <button type="button" className="tray-button" onClick={props.onKeys} aria-label="Keys" title="Keys (?)">
-          <CircleQuestionMark size={16} strokeWidth={1.5} aria-hidden />
-        </button>
       </div>
     </div>
   );
