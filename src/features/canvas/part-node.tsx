@@ -1,4 +1,4 @@
-import { type CSSProperties, memo, useEffect } from 'react';
+import { type CSSProperties, memo, useEffect, useRef } from 'react';
 import { Handle, type NodeProps, Position, useUpdateNodeInternals } from 'reactflow';
 import { bodyLedOut, type DrawnFet, type DrawnPart, isComponent, isFet } from '#shared/circuit/drawing';
 import { noteLines } from '#shared/circuit/note-lines';
@@ -21,11 +21,14 @@ export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps
   const box = partBox(part);
   const pins = pinPlaces(part.kind, place, bodyLedOut(part));
 
-  // React Flow measures terminals once and cannot know that they went elsewhere.
+  // React Flow measures all terminals at once when they are first drawn, and cannot know that some went elsewhere.
   const updateNodeInternals = useUpdateNodeInternals();
   const terminals = pins.map(({ pin, at }) => `${pin} ${at.x - box.left} ${at.y - box.top}`).join();
-  // biome-ignore lint/correctness/useExhaustiveDependencies: the terminals' places are what it is done for
-  useEffect(() => updateNodeInternals(id), [id, terminals, updateNodeInternals]);
+  const measured = useRef(terminals);
+  useEffect(() => {
+    if (measured.current !== terminals) updateNodeInternals(id);
+    measured.current = terminals;
+  }, [id, terminals, updateNodeInternals]);
 
   return (
     <div className="part" data-kind={part.kind} style={{ width: box.right - box.left, height: box.bottom - box.top }}>
