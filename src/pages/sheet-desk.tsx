@@ -7,6 +7,7 @@ import { useSession } from '../api/session';
 import { Canvas } from '../features/canvas/canvas';
 import { Ledger } from '../features/ledger/ledger';
 import { MastheadFigures } from '../features/masthead/masthead-figures';
+import { OtherPointFrame } from '../features/masthead/other-point-frame';
 import { PersonMenu } from '../features/person/person-menu';
 import { DrawingNotices } from '../features/sheet-head/drawing-notices';
 import { PeopleHere } from '../features/sheet-head/people-here';
@@ -118,6 +119,7 @@ export function SheetDesk({ room, state, answer: { sheet, team } }: SheetDeskPro
         </header>
         <DrawingNotices namesMeet={nets.namesMeet} setAside={setAside} />
         <main id="main" tabIndex={-1} className="relative min-h-40 flex-1 outline-none [container-type:size]">
+          <OtherPointFrame />
           <Canvas
             drawing={drawing}
             nets={nets}

@@ -10,7 +10,12 @@ export type Solution =
   | { readonly state: 'failed'; readonly reason: string };
 
 /** A solution, and the circuit that it is about. */
-export type SolutionOf = { readonly circuit: CircuitFile | undefined; readonly solution: Solution };
+export type SolutionOf = {
+  readonly circuit: CircuitFile | undefined;
+  readonly solution: Solution;
+  /** Whether the circuit's other operating points are still being looked for. */
+  readonly searching: boolean;
+};
 
 export type SolutionStore = {
   /** Asks for the operating point of this circuit; whatever was asked before is of no more interest. */
@@ -23,7 +28,7 @@ export type SolutionStore = {
   close(): void;
 };
 
-const NOTHING_ASKED: SolutionOf = { circuit: undefined, solution: { state: 'pending' } };
+const NOTHING_ASKED: SolutionOf = { circuit: undefined, solution: { state: 'pending' }, searching: false };
 
 /**
  * Solves the newest circuit only, and then looks whether it has other operating points: while one is being solved the next waits, a newer one takes its place in the queue, and an
@@ -58,7 +63,7 @@ export function createSolutionStore(startSolver: () => Solver): SolutionStore {
     if (running !== thisRun) return;
     running = undefined;
     if (solution.state === 'failed') stop();
-    if (wanted === circuit) publish({ circuit, solution });
+    if (wanted === circuit) publish({ circuit, solution, searching: solution.state === 'current' });
     else if (wanted) return void run(wanted);
     // Whoever hears of the first answer may already have changed the circuit.
     if (wanted === circuit && solution.state === 'current') void searchOn(circuit);
@@ -78,14 +83,15 @@ export function createSolutionStore(startSolver: () => Solver): SolutionStore {
   };
   const searchOn = async (circuit: CircuitFile) => {
     const record = await afterwards(circuit, (asked) => asked.searchedPoint());
-    if (record) publish({ circuit, solution: { state: 'current', record } });
+    if (record) publish({ circuit, solution: { state: 'current', record }, searching: false });
+    else if (wanted === circuit && latest.searching) publish({ ...latest, searching: false });
   };
 
   return {
     submit(circuit) {
       if (circuit === wanted) return;
       wanted = circuit;
-      publish({ circuit: latest.circuit, solution: outdated(latest.solution) });
+      publish({ circuit: latest.circuit, solution: outdated(latest.solution), searching: false });
       if (!running) void run(circuit);
     },
     subscribe(listener) {

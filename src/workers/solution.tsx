@@ -7,23 +7,29 @@ import {
   useState,
   useSyncExternalStore,
 } from 'react';
-import type { FetPoint, Region } from '#shared/analyses/operating-point-record';
+import type { FetPoint, Solution as Point, Region } from '#shared/analyses/operating-point-record';
 import { terminalCurrent } from '#shared/analyses/terminal-current';
 import type { CircuitFile, CircuitPart } from '#shared/circuit/circuit-file';
 import type { Problem } from '#shared/circuit/problem';
+import type { OperatingPoints, PointChoice } from './operating-points';
 import { NO_FIGURES, type SheetFigures, sheetFigures } from './sheet-figures';
 import { createSolutionStore, type Solution, type SolutionStore } from './solution-store';
 import { type Solver, startSolver } from './solver-client';
 
 export type { Solution } from './solution-store';
 
-type FigureSource = Pick<SolutionStore, 'subscribe' | 'loadLine'> & { now(): SheetFigures };
+type FigureSource = Pick<SolutionStore, 'subscribe' | 'loadLine'> & {
+  now(): SheetFigures;
+  /** Shows another of the operating points, until the circuit changes. */
+  show(index: number): void;
+};
 
 // The context itself never changes: each reader hears of its own figures alone, and the rest of a page is not drawn again.
 const SolutionContext = createContext<FigureSource>({
   now: () => NO_FIGURES,
   subscribe: () => () => undefined,
   loadLine: async () => undefined,
+  show: () => undefined,
 });
 
 /** Solves the circuit on a thread of its own each time it changes, for everything below. */
@@ -45,18 +51,36 @@ export function SolutionProvider({
 }
 
 function figureSource(store: SolutionStore): FigureSource {
+  const listeners = new Set<() => void>();
   let latest = store.latest();
+  let choice: PointChoice | undefined;
   let figures = sheetFigures(latest, NO_FIGURES);
+  const now = () => {
+    const next = store.latest();
+    if (next !== latest) {
+      latest = next;
+      figures = sheetFigures(next, figures, choice);
+    }
+    return figures;
+  };
   return {
-    subscribe: store.subscribe,
-    loadLine: store.loadLine,
-    now() {
-      const next = store.latest();
-      if (next !== latest) {
-        latest = next;
-        figures = sheetFigures(next, figures);
-      }
-      return figures;
+    subscribe(listener) {
+      listeners.add(listener);
+      const leave = store.subscribe(listener);
+      return () => {
+        listeners.delete(listener);
+        leave();
+      };
+    },
+    now,
+    // A load line goes through the first point.
+    loadLine: async (ref, voltages) => (now().points.shown === 0 ? store.loadLine(ref, voltages) : undefined),
+    show(index) {
+      const { solution } = now();
+      if (!('record' in solution)) return;
+      choice = { record: solution.record, index };
+      figures = sheetFigures(latest, figures, choice);
+      for (const listener of listeners) listener();
     },
   };
 }
@@ -102,11 +126,30 @@ export function useNetVoltage(net: string): number | undefined {
 
 /** The current in A that leaves a part by a terminal; undefined unless it is that of the circuit as it stands. */
 export function useTerminalCurrent({ kind, ref }: Pick<CircuitPart, 'kind' | 'ref'>, pin: string): number | undefined {
-  return useFigures(({ solution }) =>
-    solution.state === 'current' && solution.record.status === 'solved'
-      ? terminalCurrent(solution.record, kind, ref, pin)
-      : undefined,
+  return useFigures(({ solution, point }) =>
+    solution.state === 'current' && point ? terminalCurrent(point, kind, ref, pin) : undefined,
   );
+}
+
+/** Every figure of the operating point shown; undefined while the circuit is not solved. */
+export function useShownPoint(): Point | undefined {
+  return useFigures(({ point }) => point);
+}
+
+/** Whether the figures are those of a point other than the record's first. */
+export function useIsOtherPoint(): boolean {
+  return useFigures(({ points }) => points.shown > 0);
+}
+
+/** The circuit's operating points, which one is shown, and the way to show another. */
+export function useOperatingPoints(): OperatingPoints & { show(index: number): void } {
+  const { show } = useContext(SolutionContext);
+  return { ...useFigures(({ points }) => points), show };
+}
+
+/** What is known to hold at the point shown. */
+export function useProblems(): readonly Problem[] {
+  return useFigures(({ told }) => told);
 }
 
 const NO_PROBLEMS: readonly Problem[] = [];

@@ -1,4 +1,4 @@
-import type { OperatingPointRecord } from '#shared/analyses/operating-point-record';
+import type { Solution } from '#shared/analyses/operating-point-record';
 
 const STEPS = [1, 2, 5, 10];
 
@@ -6,10 +6,10 @@ const STEPS = [1, 2, 5, 10];
  * Where the margin rulers of a sheet end, in volts: the 1-2-5 number nearest to the largest |VDS| on it, so that all rulers
  * compare and knees are not squeezed together, but never below a knee or the place of a margin that is asked for.
  */
-export function vdsScale(record: OperatingPointRecord, askedOf: (ref: string) => number = () => 0): number {
+export function vdsScale({ fets }: Pick<Solution, 'fets'>, askedOf: (ref: string) => number = () => 0): number {
   let largest = 0;
   let furthestMark = 0;
-  for (const [ref, { vds, vdsSat }] of Object.entries(record.fets)) {
+  for (const [ref, { vds, vdsSat }] of Object.entries(fets)) {
     largest = Math.max(largest, Math.abs(vds));
     furthestMark = Math.max(furthestMark, vdsSat > 0 ? vdsSat + askedOf(ref) : 0);
   }

@@ -1,4 +1,4 @@
-import type { FetPoint, OperatingPointRecord } from '#shared/analyses/operating-point-record';
+import type { FetPoint, Solution } from '#shared/analyses/operating-point-record';
 import { type Standing, standingOf } from '#shared/analyses/verdict';
 import { type Drawing, type DrawnFet, isFet } from '#shared/circuit/drawing';
 import { byReference } from '#shared/circuit/reference-order';
@@ -10,9 +10,9 @@ export type FetRow = {
   readonly standing: Standing | undefined;
 };
 
-export function fetRows(drawing: Drawing, record: OperatingPointRecord | undefined): FetRow[] {
+export function fetRows(drawing: Drawing, solution: Pick<Solution, 'fets'> | undefined): FetRow[] {
   return drawing.parts.filter(isFet).map((part): FetRow => {
-    const point = record && Object.hasOwn(record.fets, part.ref) ? record.fets[part.ref] : undefined;
+    const point = solution && Object.hasOwn(solution.fets, part.ref) ? solution.fets[part.ref] : undefined;
     const { intent } = part.values;
     return { part, point, standing: point && intent ? standingOf(point, intent) : undefined };
   });

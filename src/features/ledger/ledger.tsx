@@ -4,7 +4,14 @@ import { type Drawing, isComponent, type PartId } from '#shared/circuit/drawing'
 import type { DrawnNets } from '#shared/circuit/nets';
 import { dimmed } from '../../formats/dimmed';
 import type { Selection } from '../../live/selection';
-import { type Solution, useSolution, useVdsScale } from '../../workers/solution';
+import {
+  type Solution,
+  useIsOtherPoint,
+  useProblems,
+  useShownPoint,
+  useSolution,
+  useVdsScale,
+} from '../../workers/solution';
 import { fetRows } from './fet-rows';
 import { FetTable } from './fet-table';
 import { LedgerFrame } from './ledger-frame';
@@ -33,24 +40,27 @@ type Tab = 'fets' | 'parts' | 'nets' | 'problems';
 export function Ledger({ drawing, nets, selection, onSelect, onLight, onFrame, onOpen, onEditSelected }: LedgerProps) {
   const solution = useSolution();
   const scaleEnd = useVdsScale();
+  const point = useShownPoint();
+  const problems = useProblems();
+  const elsewhere = useIsOtherPoint();
   const [tab, setTab] = useState<Tab>('fets');
   const [collapsed, setCollapsed] = useState(false);
 
   // The drawing and its tags come first; the tables follow as soon as those are painted, and are dimmed until then.
-  const now = useMemo(() => ({ drawing, nets, solution, scaleEnd }), [drawing, nets, solution, scaleEnd]);
+  const now = useMemo(
+    () => ({ drawing, nets, solution, scaleEnd, point, problems, elsewhere }),
+    [drawing, nets, solution, scaleEnd, point, problems, elsewhere],
+  );
   const shown = useDeferredValue(now);
   const outdated = shown !== now || solution.state === 'outdated';
-  const record = 'record' in shown.solution ? shown.solution.record : undefined;
-  const solved = record?.status === 'solved' ? record : undefined;
   const rows = useMemo(
     () => ({
-      fets: fetRows(shown.drawing, solved),
-      parts: partRows(shown.drawing, solved),
-      nets: netRows(shown.drawing, shown.nets, solved),
+      fets: fetRows(shown.drawing, shown.point),
+      parts: partRows(shown.drawing, shown.point),
+      nets: netRows(shown.drawing, shown.nets, shown.point),
     }),
-    [shown.drawing, shown.nets, solved],
+    [shown.drawing, shown.nets, shown.point],
   );
-  const problems = record?.problems ?? [];
   const empty = !drawing.parts.some(isComponent);
   const selectParts = useCallback((parts: ReadonlySet<PartId>) => onSelect({ parts, wires: new Set() }), [onSelect]);
   const goTo = (part: PartId) => {
@@ -92,7 +102,7 @@ export function Ledger({ drawing, nets, selection, onSelect, onLight, onFrame, o
             <TabName tab="nets" count={rows.nets.length} onOpen={open}>
               nets
             </TabName>
-            <TabName tab="problems" count={empty ? 0 : problems.length} onOpen={open}>
+            <TabName tab="problems" count={empty ? 0 : shown.problems.length} onOpen={open}>
               problems
             </TabName>
           </Tabs.List>
@@ -120,8 +130,13 @@ export function Ledger({ drawing, nets, selection, onSelect, onLight, onFrame, o
               <NetTable rows={rows.nets} {...common} />
             </Tabs.Content>
             <Tabs.Content value="problems">
-              {problems.length > 0 ? (
-                <ProblemList problems={problems} drawing={drawing} onFrame={goTo} />
+              {shown.elsewhere && (
+                <p className="px-4 pt-2 text-faint text-xs sm:px-6">
+                  Remarks on devices and nets at this operating point: –. They are made for the first point alone.
+                </p>
+              )}
+              {shown.problems.length > 0 ? (
+                <ProblemList problems={shown.problems} drawing={drawing} onFrame={goTo} />
               ) : (
                 <p className="px-4 py-3 text-faint text-xs sm:px-6">No problem was found.</p>
               )}

@@ -1,4 +1,4 @@
-import type { OperatingPointRecord } from '#shared/analyses/operating-point-record';
+import type { Solution } from '#shared/analyses/operating-point-record';
 import { valueFields } from '#shared/circuit/catalogue';
 import { type Drawing, type DrawnComponent, isComponent, isFet } from '#shared/circuit/drawing';
 import { type DrawnNets, terminalKey } from '#shared/circuit/nets';
@@ -18,13 +18,13 @@ export type PartRow = {
   readonly power: number | undefined;
 };
 
-export function partRows(drawing: Drawing, record: OperatingPointRecord | undefined): PartRow[] {
+export function partRows(drawing: Drawing, solution: Solution | undefined): PartRow[] {
   return drawing.parts
     .filter(isComponent)
     .filter((part) => !isFet(part))
     .sort((a, b) => byReference(a.ref, b.ref))
     .map((part) => {
-      const point = record && (own(record.sources, part.ref) ?? own(record.resistors, part.ref));
+      const point = solution && (own(solution.sources, part.ref) ?? own(solution.resistors, part.ref));
       return { part, ...valueTexts(part), voltage: point?.voltage, current: point?.current, power: point?.power };
     });
 }
@@ -48,7 +48,7 @@ export type NetRow = {
   readonly part: DrawnComponent | undefined;
 };
 
-export function netRows(drawing: Drawing, nets: DrawnNets, record: OperatingPointRecord | undefined): NetRow[] {
+export function netRows(drawing: Drawing, nets: DrawnNets, solution: Solution | undefined): NetRow[] {
   const components = new Map(drawing.parts.filter(isComponent).map((part) => [part.id, part]));
   const rows = [...nets.nets.values()].map(({ name, terminals }): NetRow => {
     const ends = terminals
@@ -59,7 +59,7 @@ export function netRows(drawing: Drawing, nets: DrawnNets, record: OperatingPoin
       .sort((a, b) => byReference(a.part.ref, b.part.ref));
     return {
       name,
-      voltage: record && own(record.nets, name),
+      voltage: solution && own(solution.nets, name),
       terminals: ends.map(({ part, pin }) => `${part.ref}.${pin}`),
       part: ends[0]?.part,
     };

@@ -4,23 +4,29 @@ import { formatExact, formatValue } from '#shared/units/format-value';
 import { type ParsedValue, parseValue } from '#shared/units/parse-value';
 import type { SheetCommands } from '../../live/sheet-commands';
 import { ValueField } from '../../ui/value-field';
-import { useSolution, useSolvedCircuit } from '../../workers/solution';
+import { useIsOtherPoint, useProblems, useShownPoint, useSolution, useSolvedCircuit } from '../../workers/solution';
+import { OperatingPoints } from './operating-points';
 import { ProblemSummary } from './problem-summary';
 import { sheetSummary } from './sheet-summary';
 import { VerdictCounts } from './verdict-counts';
 
-/** The sheet in one line: its temperature, the current and power its sources deliver, how its devices stand, and what is wrong. */
+/** The sheet in one line: which operating point is shown, its temperature, the current and power its sources deliver, how its devices stand, and what is wrong. */
 export function MastheadFigures({ settings, commands }: { settings: SheetSettings; commands: SheetCommands }) {
   const solution = useSolution();
   const circuit = useSolvedCircuit();
   const record = 'record' in solution && circuit && circuit.parts.length > 0 ? solution.record : undefined;
-  const summary = circuit && record?.status === 'solved' ? sheetSummary(circuit, record) : undefined;
+  const point = useShownPoint();
+  const problems = useProblems();
+  const elsewhere = useIsOtherPoint();
+  const summary = circuit && record && point ? sheetSummary(circuit, point) : undefined;
   const busy = solution.state === 'outdated' || solution.state === 'pending';
   return (
     <div className="flex flex-wrap items-center gap-x-5 gap-y-1">
+      {/* First, so that nothing else moves when further points are found. */}
+      <OperatingPoints />
       <Temperature celsius={settings.temperature} commands={commands} />
       <div aria-busy={busy} className={`contents *:transition-opacity ${busy ? '*:opacity-45 *:delay-150' : ''}`}>
-        {summary && summary.power > 0 && (
+        {summary && (summary.power > 0 || elsewhere) && (
           <p
             className="whitespace-nowrap"
             title={`${formatValue(summary.current, 'A', 4)}: the sum of the currents that the voltage sources deliver. ${formatValue(summary.power, 'W', 4)}: the power that all sources deliver together.`}
@@ -36,7 +42,7 @@ export function MastheadFigures({ settings, commands }: { settings: SheetSetting
         )}
         {summary && <VerdictCounts counts={summary.verdicts} />}
         {solution.state === 'failed' && <p className="max-w-96 text-missed text-xs">{solution.reason}</p>}
-        {record && <ProblemSummary status={record.status} problems={record.problems} />}
+        {record && <ProblemSummary status={record.status} problems={problems} />}
       </div>
     </div>
   );

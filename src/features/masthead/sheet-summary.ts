@@ -1,4 +1,4 @@
-import type { OperatingPointRecord } from '#shared/analyses/operating-point-record';
+import type { Solution } from '#shared/analyses/operating-point-record';
 import { standingOf, type Verdict } from '#shared/analyses/verdict';
 import { type CircuitFile, isFet } from '#shared/circuit/circuit-file';
 
@@ -16,16 +16,16 @@ export type SheetSummary = {
   readonly power: number;
 };
 
-export function sheetSummary(circuit: CircuitFile, record: OperatingPointRecord): SheetSummary {
+export function sheetSummary(circuit: CircuitFile, solution: Pick<Solution, 'fets' | 'sources'>): SheetSummary {
   const verdicts = { met: 0, thin: 0, missed: 0 };
   for (const part of circuit.parts) {
     if (!isFet(part) || !part.intent) continue;
-    const point = Object.hasOwn(record.fets, part.ref) ? record.fets[part.ref] : undefined;
+    const point = Object.hasOwn(solution.fets, part.ref) ? solution.fets[part.ref] : undefined;
     if (point) verdicts[standingOf(point, part.intent).verdict] += 1;
   }
-  const power = Object.values(record.sources).reduce((sum, source) => sum + source.power, 0);
+  const power = Object.values(solution.sources).reduce((sum, source) => sum + source.power, 0);
   const current = circuit.parts.reduce((sum, { kind, ref }) => {
-    const source = kind === 'voltage' && Object.hasOwn(record.sources, ref) ? record.sources[ref] : undefined;
+    const source = kind === 'voltage' && Object.hasOwn(solution.sources, ref) ? solution.sources[ref] : undefined;
     return source && source.power > 0 ? sum + Math.abs(source.current) : sum;
   }, 0);
   return { verdicts, current, power };

@@ -5,7 +5,13 @@ import type { FetPoint } from '#shared/analyses/operating-point-record';
 import { type CircuitFile, isFet } from '#shared/circuit/circuit-file';
 import type { DrawnFet } from '#shared/circuit/drawing';
 import { DEFAULT_TEMPERATURE } from '#shared/circuit/read-circuit';
-import { useAskLoadLine, useFetPoint, useSolutionState, useSolvedCircuit } from '../../workers/solution';
+import {
+  useAskLoadLine,
+  useFetPoint,
+  useIsOtherPoint,
+  useSolutionState,
+  useSolvedCircuit,
+} from '../../workers/solution';
 import { curveEnd } from './curve-scale';
 
 /** A FET where it stands: its point, its own curve and, as soon as it is known, the load it sees. V and A as magnitudes. */
@@ -32,7 +38,10 @@ export function useDeviceView({ ref, values: { intent } }: DrawnFet): DeviceView
     const { processes = {}, temperature = DEFAULT_TEMPERATURE } = circuit;
     return { point, end, curve: deviceCurve(part, processes, temperature, point, voltages) };
   }, [circuit, point, ref, intent]);
-  const load = useLoadLine(ref, own?.curve.vds, outdated ? undefined : circuit);
+  // The load is known as it is at the first point.
+  const elsewhere = useIsOtherPoint();
+  const line = useLoadLine(ref, own?.curve.vds, outdated || elsewhere ? undefined : circuit);
+  const load = elsewhere ? undefined : line;
   return useMemo(() => own && { ...own, load, outdated }, [own, load, outdated]);
 }
 

@@ -44,19 +44,19 @@ function heldSolvers() {
 test('only the newest of the circuits that waited is solved, and an answer to an older one is never shown', async () => {
   const { asked, start } = heldSolvers();
   const store = createSolutionStore(start);
-  const shown: number[] = [];
+  const shown = new Set<number>();
   store.subscribe(() => {
     const { solution } = store.latest();
-    if (solution.state === 'current') shown.push(solution.record.nets.middle ?? Number.NaN);
+    if (solution.state === 'current') shown.add(solution.record.nets.middle ?? Number.NaN);
   });
   for (const volts of [1, 2, 3]) store.submit(divider(volts));
   expect(asked).toHaveLength(1);
   asked[0]?.answer();
   await vi.waitFor(() => expect(asked).toHaveLength(2));
-  expect(shown).toEqual([]);
+  expect([...shown]).toEqual([]);
   expect(asked[1]?.circuit).toEqual(divider(3));
   asked[1]?.answer();
-  await vi.waitFor(() => expect(shown).toEqual([1.5]));
+  await vi.waitFor(() => expect([...shown]).toEqual([1.5]));
 });
 
 test('figures are outdated from the moment of a change until its own answer comes', async () => {
