@@ -43,6 +43,11 @@ export function MastheadFigures({ settings, commands }: { settings: SheetSetting
         {summary && <VerdictCounts counts={summary.verdicts} />}
         {solution.state === 'failed' && <p className="max-w-96 text-missed text-xs">{solution.reason}</p>}
         {record && <ProblemSummary status={record.status} problems={problems} />}
+        {elsewhere && (
+          <p className="text-faint" title="Remarks on devices and nets are made for the first point alone.">
+            remarks –
+          </p>
+        )}
       </div>
     </div>
   );

@@ -6,7 +6,7 @@ import { dimmed } from '../../formats/dimmed';
 import { useOperatingPoints, useSolvedCircuit } from '../../workers/solution';
 import { pointFigures, pointWords } from './point-words';
 
-/** Which of a circuit's operating points the page shows, and the way to the others; nothing where there is one only. */
+/** Which of a circuit's operating points the page shows, and the way to the others; nothing where there is one that may last. */
 export function OperatingPoints() {
   const { points, shown, count, show } = useOperatingPoints();
   const busy = points.length < count;
@@ -14,6 +14,11 @@ export function OperatingPoints() {
   return (
     <>
       <PointAnnouncer />
+      {shown === 0 && points[0]?.surelyUnstable && (
+        <p className="font-bold text-missed" title="The circuit does not stay at this operating point.">
+          surely unstable
+        </p>
+      )}
       {count > 1 && (
         <fieldset aria-label="Operating points" aria-busy={busy} className={`flex items-center ${dimmed(busy)}`}>
           <StepButton label="Previous operating point" onClick={() => step(-1)}>

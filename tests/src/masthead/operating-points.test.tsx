@@ -3,6 +3,7 @@ import { cleanup, configure, render, screen, within } from '@testing-library/rea
 import { userEvent } from '@testing-library/user-event';
 import { useMemo } from 'react';
 import { afterEach, beforeEach, expect, test, vi } from 'vitest';
+import { operatingPoint } from '#shared/analyses/operating-point';
 import type { CircuitFile, CircuitPart, FetPart } from '#shared/circuit/circuit-file';
 import { type Drawing, type DrawnPart, isFet } from '#shared/circuit/drawing';
 import { netlist } from '#shared/circuit/netlist';
@@ -171,6 +172,7 @@ test('a reference that nothing starts names its zero-current point as the hazard
   expect(within(screen.getByRole('table', { name: 'FETs' })).getAllByText('met')).toHaveLength(5);
   await user.click(screen.getByRole('tab', { name: /^problems/ }));
   expect(screen.getByText(/at this operating point: –/)).toBeDefined();
+  expect(screen.getByText('remarks –')).toBeDefined();
 
   await user.click(screen.getByRole('button', { name: 'show the first' }));
   expect(tag()).toContain('saturated');
@@ -194,5 +196,20 @@ test('a circuit with one operating point has no such control', async () => {
   );
   await vi.waitFor(() => expect(searched).toHaveBeenCalled());
   await screen.findByTitle(/the voltage sources deliver/);
+  expect(screen.queryByRole('group', { name: 'Operating points' })).toBeNull();
+});
+
+test('an unstable point is marked also where no other was found', async () => {
+  const record = operatingPoint(latch(2));
+  const between = record.alternatives.find(({ surelyUnstable }) => surelyUnstable);
+  if (!between) throw new Error('the latch has a point in between');
+  const alone = { ...record, ...between, alternatives: [] };
+  const start = () => ({ ...solverHere(), firstPoint: async () => alone, searchedPoint: async () => alone });
+  render(
+    <SolutionProvider circuit={latch(2)} start={start}>
+      <MastheadFigures settings={BLANK_DRAWING.settings} commands={onlooker} />
+    </SolutionProvider>,
+  );
+  await screen.findByText('surely unstable');
   expect(screen.queryByRole('group', { name: 'Operating points' })).toBeNull();
 });
