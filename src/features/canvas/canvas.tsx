@@ -170,11 +170,11 @@ function Board(props: CanvasProps) {
   const changes = useFlowChanges(latestDesk);
   useClipboard(board, latestDesk);
 
-  // biome-ignore lint/correctness/useExhaustiveDependencies: only a new request frames again, not a part that moved
   useEffect(() => {
-    const part = frame && geometry.parts.get(frame.part);
+    // A new request frames again; a part that moved meanwhile does not.
+    const part = frame && latestPicture.current.geometry.parts.get(frame.part);
     if (part) view.frame(partBox(part));
-  }, [frame?.request]);
+  }, [frame, view, latestPicture]);
 
   const fit = useCallback(() => {
     const { geometry, texts } = latestPicture.current;

@@ -1,11 +1,11 @@
 import { useRef } from 'react';
 import type { Edge, Node } from 'reactflow';
+import { isDepletion } from '#shared/circuit/depletion';
 import {
   type Drawing,
   type DrawnPart,
   isFet,
   type PartId,
-  type SheetSettings,
   type Wire,
   type WireId,
 } from '#shared/circuit/drawing';
@@ -52,7 +52,7 @@ export function useFlowElements(
   const nodes = [...geometry.parts.values()].map((part) => {
     const data = {
       part,
-      depletion: isDepletion(part, drawing.settings),
+      depletion: isFet(part) && isDepletion(part, drawing.settings),
       slipOpen: part.id === slipPart,
       written: texts.written.has(part.id),
       label: texts.labels.get(part.id),
@@ -128,15 +128,6 @@ function spokenWire(wire: Wire, geometry: SheetGeometry, net: string | undefined
     return part ? spokenTerminal(part, end.pin) : end.pin;
   });
   return `Wire of net ${net ?? 'without name'}, ${from} to ${to}`;
-}
-
-/** Whether a FET conducts at VGS = 0: its threshold has the sign that its kind has when depleted. */
-function isDepletion(part: DrawnPart, { processes }: SheetSettings): boolean {
-  if (!isFet(part)) return false;
-  const { overrides, process } = part.values;
-  const threshold = overrides?.threshold ?? processes[process ?? '']?.[part.kind]?.threshold;
-  if (threshold === undefined) return false;
-  return part.kind === 'nfet' ? threshold < 0 : threshold > 0;
 }
 
 /** Ids come back from React Flow as plain strings; these are the ones it was given. */

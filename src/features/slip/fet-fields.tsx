@@ -1,11 +1,11 @@
 import { isInvented } from '#shared/circuit/built-in-process';
 import { regionSchema } from '#shared/circuit/circuit-file';
+import { isDepletion } from '#shared/circuit/depletion';
 import type { DrawnFet, SheetSettings } from '#shared/circuit/drawing';
 import { formatExact } from '#shared/units/format-value';
 import type { SheetCommands } from '../../live/sheet-commands';
 import { EditedValue } from './editing';
 import { ChosenField, ShownValue, TypedField } from './fields';
-import { isDepletion } from './parameters';
 import { readCount, readMargin } from './read-fields';
 import { resized, type Sizing, sizingOf } from './sizing';
 
@@ -61,7 +61,7 @@ export function FetFields({
         canEdit={canEdit}
         note={isInvented(process) ? 'invented figures' : undefined}
       />
-      {isDepletion(part, settings.processes) && <ShownValue label="channel">depletion</ShownValue>}
+      {isDepletion(part, settings) && <ShownValue label="channel">depletion</ShownValue>}
       <BodyField
         ledOut={bodyLedOut}
         canEdit={canEdit}

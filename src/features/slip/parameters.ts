@@ -69,12 +69,6 @@ export function withParameter(
   return Object.keys(next).length === 0 ? null : next;
 }
 
-/** Whether the device conducts at VGS = 0. */
-export function isDepletion(part: DrawnFet, processes: SheetSettings['processes']): boolean {
-  const threshold = part.values.overrides?.threshold ?? processValue(part, processes, 'threshold') ?? 0;
-  return part.kind === 'nfet' ? threshold < 0 : threshold > 0;
-}
-
 /** A parameter written as a bare number of `unit`, which is 10^`exponent` of the SI unit. */
 function written(
   name: ParameterName,
