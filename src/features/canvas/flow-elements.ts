@@ -1,14 +1,7 @@
 import { useRef } from 'react';
 import type { Edge, Node } from 'reactflow';
 import { isDepletion } from '#shared/circuit/depletion';
-import {
-  type Drawing,
-  type DrawnPart,
-  isFet,
-  type PartId,
-  type Wire,
-  type WireId,
-} from '#shared/circuit/drawing';
+import { type Drawing, type DrawnPart, isFet, type PartId, type Wire, type WireId } from '#shared/circuit/drawing';
 import { type DrawnNets, terminalKey } from '#shared/circuit/nets';
 import type { Anchor } from '#shared/geometry/box';
 import { type GridPoint, samePoint } from '#shared/geometry/place';
