@@ -1,7 +1,7 @@
 import { gzipSync } from 'node:zlib';
-import { expect, test } from '@playwright/test';
 import { openWindow, signIn } from './fixtures/people';
 import { SheetPage } from './fixtures/sheet-page';
+import { expect, test } from './fixtures/test';
 import { Served } from './support/served';
 
 /** Kilobytes of script, gzipped: of every page before the drawing is opened, and with it. */

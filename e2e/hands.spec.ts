@@ -1,6 +1,6 @@
-import { expect, type Page, test } from '@playwright/test';
 import { beginSheet, openWindow, signUp } from './fixtures/people';
 import type { SheetPage } from './fixtures/sheet-page';
+import { expect, type Page, test } from './fixtures/test';
 import { Served } from './support/served';
 
 test.describe.configure({ timeout: 180_000 });

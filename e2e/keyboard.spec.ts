@@ -1,6 +1,6 @@
-import { expect, type Page, test } from '@playwright/test';
 import { openWindow, signUp } from './fixtures/people';
 import { SheetPage } from './fixtures/sheet-page';
+import { expect, type Page, test } from './fixtures/test';
 import { Served } from './support/served';
 
 test.describe.configure({ timeout: 240_000 });

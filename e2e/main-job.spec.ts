@@ -1,7 +1,7 @@
-import { expect, test } from '@playwright/test';
 import { formatValue } from '#shared/units/format-value';
 import { beginSheet, invitationLink, openWindow, signUp } from './fixtures/people';
 import { SheetPage } from './fixtures/sheet-page';
+import { expect, test } from './fixtures/test';
 import { Served } from './support/served';
 
 let served: Served;

@@ -1,6 +1,6 @@
-import { expect, test } from '@playwright/test';
 import { openWindow, signIn } from './fixtures/people';
 import { SheetPage } from './fixtures/sheet-page';
+import { expect, test } from './fixtures/test';
 import { Served } from './support/served';
 
 let served: Served;

@@ -1,7 +1,7 @@
 import AxeBuilder from '@axe-core/playwright';
-import { expect, type Locator, type Page, test } from '@playwright/test';
 import { openWindow, signIn } from './fixtures/people';
 import { SheetPage } from './fixtures/sheet-page';
+import { expect, type Locator, type Page, test } from './fixtures/test';
 import { Served } from './support/served';
 
 // Two people at once, each in a browser window of their own.

@@ -1,8 +1,8 @@
 import { AxeBuilder } from '@axe-core/playwright';
-import { expect, type Page, test } from '@playwright/test';
 import { formatValue } from '#shared/units/format-value';
 import { openWindow, signIn } from './fixtures/people';
 import { SheetPage } from './fixtures/sheet-page';
+import { expect, type Page, test } from './fixtures/test';
 import { Served } from './support/served';
 
 let served: Served;

@@ -3,9 +3,10 @@ import base from '../../playwright.config';
 export default {
   ...base,
   testDir: '.',
-  outputDir: '../../test-results/bench',
   testMatch: '*.bench.ts',
+  outputDir: '../../test-results/bench',
   timeout: 600_000,
-  retries: 0,
   reporter: 'list',
+  // A trace takes a copy of the page at every move of the pointer, and would be what is measured.
+  use: { ...base.use, trace: 'off', screenshot: 'off' },
 };

@@ -12,7 +12,7 @@ import { circuitOf, tiled } from './tiled';
 const LEAST_RATIO = 0.9;
 /** ms from Enter to painted tags, 95th percentile. */
 const MOST_MS = 50;
-const ROUNDS = 5;
+const ROUNDS = 3;
 const EDITS = 40;
 
 const pair = STARTERS.find(({ id }) => id === 'differential-pair')?.drawing;
