@@ -50,9 +50,9 @@ test('from too far to read the glyphs alone are left, and near again the figures
   await page.mouse.move(box.x + box.width / 2, box.y + box.height / 2);
   await expect(async () => {
     await page.mouse.wheel(0, 400);
-    await expect(label).toBeHidden({ timeout: 200 });
+    await expect(label).toBeHidden({ timeout: 500 });
+    await expect(sheet.tag('Q6').getByText('A', { exact: false }).first()).toBeHidden({ timeout: 500 });
   }).toPass();
-  await expect(sheet.tag('Q6').getByText('A', { exact: false }).first()).toBeHidden();
   const glyph = await page.locator('.far-glyph svg').first().boundingBox();
   expect(glyph?.width).toBeGreaterThan(7);
   await page.getByRole('button', { name: 'show the whole drawing' }).click();
