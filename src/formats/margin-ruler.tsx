@@ -1,3 +1,4 @@
+import { useId } from 'react';
 import type { FetPoint } from '#shared/analyses/operating-point-record';
 import type { Intent } from '#shared/circuit/circuit-file';
 import { formatVoltage } from './figures';
@@ -23,11 +24,13 @@ export function MarginRuler({
   scaleEnd: number;
   width: number;
 }) {
+  const clip = useId();
   const at = (volts: number) => (volts / scaleEnd) * width;
   const knee = Math.min(width, at(point.vdsSat));
   const vds = at(Math.abs(point.vds));
   const notch = notchAt(point, intent);
   const notchX = notch === undefined ? undefined : at(notch);
+  const whole = `M0 0H${width}V${HEIGHT}H0Z`;
   return (
     <svg
       width={width}
@@ -37,14 +40,24 @@ export function MarginRuler({
       aria-label={rulerText(point, intent)}
       className="block overflow-visible"
     >
-      {point.region === 'off' ? (
-        <path d={bar(0, width, notchX)} fill="var(--off)" />
-      ) : (
-        <>
-          <path d={bar(0, knee, notchX)} fill="var(--triode)" />
-          <path d={bar(knee, width, notchX)} fill="var(--saturated)" />
-        </>
+      {notchX !== undefined && notchX <= width && (
+        <clipPath id={clip}>
+          <path
+            clipRule="evenodd"
+            d={`${whole}M${notchX - 1} ${BAR_TOP}H${notchX + 1}L${notchX + 2.5} ${BAR_FOOT}H${notchX - 2.5}Z`}
+          />
+        </clipPath>
       )}
+      <g clipPath={notchX !== undefined && notchX <= width ? `url(#${clip})` : undefined}>
+        {point.region === 'off' ? (
+          <path d={bar(0, width)} fill="var(--off)" />
+        ) : (
+          <>
+            <path d={bar(0, knee)} fill="var(--triode)" />
+            <path d={bar(knee, width)} fill="var(--saturated)" />
+          </>
+        )}
+      </g>
       {point.region !== 'off' && <path d={`M${hairline(knee)} 6V13`} stroke="var(--ink)" />}
       {vds <= width ? (
         <circle cx={vds} cy={MARKER_Y} r="3" fill="var(--ink)" />
@@ -61,14 +74,8 @@ export function MarginRuler({
   );
 }
 
-/** A stretch of the bar in two pieces where the notch lies in it; a clip path would cost every frame of a large sheet. */
-function bar(from: number, to: number, notch: number | undefined): string {
-  if (notch === undefined || notch <= from || notch >= to) return `M${from} ${BAR_TOP}H${to}V${BAR_FOOT}H${from}Z`;
-  const within = (x: number) => Math.min(to, Math.max(from, x));
-  return (
-    `M${from} ${BAR_TOP}H${within(notch - 1)}L${within(notch - 2.5)} ${BAR_FOOT}H${from}Z` +
-    `M${within(notch + 1)} ${BAR_TOP}H${to}V${BAR_FOOT}H${within(notch + 2.5)}Z`
-  );
+function bar(from: number, to: number): string {
+  return `M${from} ${BAR_TOP}H${to}V${BAR_FOOT}H${from}Z`;
 }
 
 function hairline(x: number): number {

@@ -2,7 +2,7 @@ import { type ComponentType, memo } from 'react';
 import { EdgeLabelRenderer } from 'reactflow';
 import type { GridPoint } from '#shared/geometry/place';
 import type { LitNet } from './lit-net';
-import { type NetSpot, spotBox } from './net-spots';
+import type { NetSpot } from './net-spots';
 import { pathOf } from './wire-edge';
 
 type NetMarksProps = {
@@ -53,14 +53,11 @@ type NetLabelProps = {
   readonly NetVoltage: ComponentType<{ net: string }> | undefined;
 };
 
-const NetLabel = memo(function NetLabel({ spot, lit, NetVoltage }: NetLabelProps) {
-  const { left, top, right } = spotBox(spot);
+const NetLabel = memo(function NetLabel({ spot: { net, named, at }, lit, NetVoltage }: NetLabelProps) {
   return (
-    <div className="net-spot" style={{ left, top, width: right - left }}>
-      <div className="net-label" data-lit={lit || undefined}>
-        {spot.named && <span className="net-name">{spot.net}</span>}
-        {NetVoltage && <NetVoltage net={spot.net} />}
-      </div>
+    <div className="net-label" data-lit={lit || undefined} style={{ left: at.x, top: at.y }}>
+      {named && <span className="net-name">{net}</span>}
+      {NetVoltage && <NetVoltage net={net} />}
     </div>
   );
 });

@@ -12,7 +12,6 @@ import { nameOf, spokenPart, spokenTerminal, terminalTitle, valueText } from './
 import { onPart } from './sheet-texts';
 import { EMPTY_NOTE, partBox, terminalReach } from './symbol-box';
 import { orientation, PartSymbol } from './symbols';
-import { labelBlock, TAG_HEIGHT, TAG_WIDTH } from './text-blocks';
 
 /** A part on the sheet: its symbol, terminals, texts and tag. The outer element that places it is React Flow's. */
 export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps<PartData>) {
@@ -57,7 +56,7 @@ export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps
       ))}
       {label && <PartLabel part={part} anchor={onPart(label, part)} box={box} />}
       {isFet(part) && tag && !slipOpen && (
-        <div className="part-tag" style={hang(onPart(tag, part), box, TAG_WIDTH, TAG_HEIGHT)}>
+        <div className="part-tag" style={hang(onPart(tag, part), box)}>
           <Tag part={part} />
           <FarGlyph part={part} />
         </div>
@@ -101,7 +100,7 @@ function Terminal({ part, pin: { pin, at, leaves }, box }: { part: DrawnPart; pi
       isConnectable={false}
       isConnectableStart={false}
       className="terminal"
-      style={{ left: at.x - box.left - reach / 2, top: at.y - box.top - reach / 2, width: reach, height: reach }}
+      style={{ left: at.x - box.left, top: at.y - box.top, width: reach, height: reach }}
       role="button"
       tabIndex={-1}
       aria-label={isComponent(part) ? label : `Terminal of ${label}`}
@@ -117,12 +116,8 @@ const alignments = ['right', 'center', 'left'] as const;
 function PartLabel({ part, anchor, box }: { part: DrawnPart; anchor: Anchor; box: Box }) {
   const { PartProblem } = useCanvasParts();
   const value = valueText(part);
-  const { width, height } = labelBlock(part) ?? { width: 0, height: 0 };
   return (
-    <div
-      className="part-label"
-      style={{ ...hang(anchor, box, width, height), textAlign: alignments[anchor.grows.x + 1] }}
-    >
+    <div className="part-label" style={{ ...hang(anchor, box), textAlign: alignments[anchor.grows.x + 1] }}>
       <div className={isComponent(part) ? 'part-ref' : 'part-net'}>{nameOf(part)}</div>
       {value !== undefined && <div className="part-value">{value}</div>}
       {isComponent(part) && !isFet(part) && <PartProblem part={part} />}
@@ -130,13 +125,13 @@ function PartLabel({ part, anchor, box }: { part: DrawnPart; anchor: Anchor; box
   );
 }
 
-/** Without a transform, which would make every text a layer of its own and slow each frame. */
-function hang({ at, grows }: Anchor, box: Box, width: number, height: number): CSSProperties {
-  const level =
-    grows.x < 0 ? { right: box.right - at.x } : { left: at.x - box.left - (grows.x === 0 ? Math.round(width / 2) : 0) };
-  const upright =
-    grows.y < 0 ? { bottom: box.bottom - at.y } : { top: at.y - box.top - (grows.y === 0 ? height / 2 : 0) };
-  return { ...level, ...upright, ...(grows.x === 0 ? { width } : {}) };
+function hang({ at, grows }: Anchor, box: Box): CSSProperties {
+  const share = (direction: number) => `${(direction - 1) * 50}%`;
+  return {
+    left: at.x - box.left,
+    top: at.y - box.top,
+    transform: `translate(${share(grows.x)}, ${share(grows.y)})`,
+  };
 }
 
 function sideOf({ x, y }: GridPoint): Position {

@@ -1,8 +1,14 @@
 import { type MouseEvent, memo } from 'react';
-import ReactFlow, { ConnectionMode, type EdgeChange, type NodeChange } from 'reactflow';
+import ReactFlow, {
+  Background,
+  BackgroundVariant,
+  ConnectionMode,
+  type EdgeChange,
+  type NodeChange,
+  useStore,
+} from 'reactflow';
 import { GRID } from '#shared/geometry/place';
 import type { PartNodeType, WireEdgeType } from './flow-elements';
-import { Grid } from './grid';
 import { PartNode } from './part-node';
 import { LEAST_ZOOM, MOST_ZOOM } from './use-view';
 import { WireEdge } from './wire-edge';
@@ -73,3 +79,9 @@ export const SheetFlow = memo(function SheetFlow(props: SheetFlowProps) {
     </ReactFlow>
   );
 });
+
+/** Small crosses; only every fifth where they would run into each other. */
+function Grid() {
+  const dense = useStore(({ transform }) => transform[2] >= 0.5);
+  return <Background variant={BackgroundVariant.Cross} gap={dense ? GRID : GRID * 5} size={dense ? 3 : 6} />;
+}
